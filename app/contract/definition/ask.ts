@@ -1,0 +1,128 @@
+/** What the file asks. */
+import * as z from 'zod'
+import { parseQuantity, type Time } from '../../../engine/index.ts'
+import { found } from '../fault.ts'
+import { quantitySentence } from '../words/quantity-words.ts'
+import { always, complain } from './clashes.ts'
+import { conversionField, quantityField, quantityPattern, rangeSentence, record } from './fields.ts'
+
+const within = quantityField('time', 'above', { title: 'reaction time from the first dose' })
+
+const between = z
+  .tuple(
+    [
+      quantityField('temperature', 'above', { title: 'the lower bound', example: '25 degC' }),
+      quantityField('temperature', 'above', { title: 'the upper bound', example: '60 degC' }),
+    ],
+    {
+      error: (issue) => `found ${found(issue.input)}; between is a list of two temperatures, the lower first`,
+    },
+  )
+  .superRefine((value, ctx) => {
+    const [low, high] = Array.isArray(value) ? value : []
+    if (typeof low === 'number' && typeof high === 'number' && !(low < high)) {
+      complain(
+        ctx,
+        'the first temperature is not below the second; between goes from the lower to the higher',
+      )
+    }
+  }, always)
+
+const longestTrace = 1_000_000
+const due = { called: 'a time', units: ['h', 'min', 's', 'd'], example: '1 h' }
+
+/** Times of a trace, read in one loop: a million of them must neither be slow nor each raise its own fault. */
+const traceTimes = z
+  .array(z.unknown(), {
+    error: (issue) => `found ${found(issue.input)}; at is a list of times, such as ["0 h", "1 h"]`,
+  })
+  .meta({
+    description: 'times from the start of the programme',
+    minItems: 1,
+    maxItems: longestTrace,
+    items: { type: 'string', pattern: quantityPattern(['time']), examples: ['1 h'] },
+  })
+  .transform((list, ctx): readonly Time[] => {
+    const refuse = (message: string, ...path: number[]) =>
+      ctx.issues.push({ code: 'custom', input: list, message, path })
+    if (list.length === 0) refuse('found an empty list; at least one time is due, such as "1 h"')
+    if (list.length > longestTrace) {
+      refuse(`found ${list.length} times; a trace has at most ${longestTrace}`)
+      return z.NEVER
+    }
+    const times: Time[] = []
+    for (const [place, text] of list.entries()) {
+      const read = typeof text === 'string' ? parseQuantity(text, 'time') : undefined
+      if (read?.ok && read.value >= 0) times.push(read.value)
+      else if (typeof text !== 'string' || read === undefined) {
+        refuse(
+          `found ${found(text)}; write a time as a text with its unit, such as "1 h" (units that fit: h, min, s, d)`,
+          place,
+        )
+      } else if (read.ok) refuse(rangeSentence(text, 'at-least', 'a time of the trace'), place)
+      else refuse(quantitySentence(text, read.failure, due), place)
+      if (ctx.issues.length > 100) break
+    }
+    return times
+  })
+
+const find = <F extends string>(word: F) => z.literal(word)
+
+const temperature = z.discriminatedUnion(
+  'best',
+  [
+    record('the temperature with the shortest time', {
+      find: find('temperature'),
+      best: z.literal('time'),
+      conversion: conversionField(),
+      between,
+    }),
+    record('the temperature with the highest conversion', {
+      find: find('temperature'),
+      best: z.literal('conversion'),
+      within,
+      between,
+    }),
+  ],
+  {
+    error: (issue) => wordFault(issue, 'best', 'with "find": "temperature", best is "time" or "conversion"'),
+  },
+)
+
+export const ask = z.discriminatedUnion(
+  'find',
+  [
+    record('how long a conversion takes', { find: find('time'), conversion: conversionField() }),
+    record('the dose that makes a conversion in time', {
+      find: find('dose'),
+      conversion: conversionField(),
+      within,
+    }),
+    temperature,
+    record('the course of the batch', { find: find('trace'), at: traceTimes }),
+  ],
+  {
+    error: (issue) =>
+      wordFault(issue, 'find', 'this version answers "time", "dose", "temperature" and "trace"'),
+  },
+)
+
+const later = ['cheapest', 'probability']
+
+const wordFault = (
+  issue: { readonly code?: string; readonly input?: unknown },
+  key: string,
+  answers: string,
+): string => {
+  if (issue.code !== 'invalid_union') {
+    return issue.input === undefined
+      ? 'is missing; it is an object that says what to find'
+      : `found ${found(issue.input)}; ask is an object that says what to find`
+  }
+  const word = (issue.input as Readonly<Record<string, unknown>> | undefined)?.[key]
+  if (word === undefined) return `is missing; ${answers}`
+  const known = typeof word === 'string' && later.includes(word)
+  return known
+    ? `found ${found(word)}, which this version does not answer; ${answers}`
+    : `found ${found(word)}; ${answers}`
+}

@@ -1,0 +1,43 @@
+/** What things cost, and how much constants and charges scatter. */
+import { always, complain } from './clashes.ts'
+import { moneyField, numberField, quantityField, record } from './fields.ts'
+
+export const costs = record('what a batch costs', {
+  enzyme: moneyField('mass', { title: 'price of the preparation', example: '30 EUR/kg' }).exactOptional(),
+  vessel: moneyField('time', { title: 'cost of the vessel', example: '85 EUR/h' }).exactOptional(),
+  turnaround: quantityField('time', 'at-least', {
+    title: 'vessel time per batch beside the reaction',
+    example: '90 min',
+  }).exactOptional(),
+}).superRefine((value, ctx) => {
+  const enzyme = value?.enzyme?.currency
+  const vessel = value?.vessel?.currency
+  if (enzyme !== undefined && vessel !== undefined && enzyme !== vessel) {
+    complain(
+      ctx,
+      `found money in ${vessel}, while costs.enzyme is in ${enzyme}; use one currency throughout`,
+      'vessel',
+    )
+  }
+}, always)
+
+const relative = (what: string) =>
+  numberField(`relative standard deviation of ${what}`, { atLeast: 0 }).exactOptional()
+
+export const spreads = record('how much things scatter', {
+  rate: relative('the rate'),
+  Km: relative('Km'),
+  Kic: relative('Kic'),
+  Kiu: relative('Kiu'),
+  Ksi: relative('Ksi'),
+  Keq: relative('Keq'),
+  kd: relative('kd'),
+  lotActivity: relative("a lot's activity"),
+  dose: relative('the dose'),
+  concentration: relative('the concentration charged'),
+  temperature: quantityField('temperature difference', 'at-least', {
+    title: 'standard deviation of the temperature',
+    example: '0.4 K',
+  }).exactOptional(),
+  pH: numberField('standard deviation of the pH', { atLeast: 0 }).exactOptional(),
+})

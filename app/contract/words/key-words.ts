@@ -1,0 +1,19 @@
+/** Sentences for keys that are unknown or belong to a later version. */
+import { nearest } from '../../../engine/index.ts'
+import { visible } from '../fault.ts'
+
+/** Why a key may not stand in an object with these known ones. */
+export const unknownKeySentence = (key: string, known: readonly string[]): string => {
+  const later = laterKeys[key]
+  if (later !== undefined && Object.hasOwn(laterKeys, key) && known.includes('find')) return later
+  const near = nearest(key, known)
+  const offer = near === undefined ? `known here: ${known.join(', ')}` : `the nearest known one is "${near}"`
+  return `the key "${visible(key)}" is not known here; ${offer}`
+}
+
+const laterKeys: Readonly<Record<string, string>> = {
+  confidence:
+    'this version does not answer with a confidence; without "confidence" it answers the dose for the stated constants',
+  temperatures:
+    'this version does not answer over a range of temperatures and doses; it answers "find": "temperature" with "between"',
+}

@@ -1,0 +1,12 @@
+/** The door: everything the app may use of the engine. */
+export type * from './answer.ts'
+export * from './outcome.ts'
+export type * from './scenario.ts'
+export { currencyCodes } from './units/currencies.ts'
+export { type DimensionName, dimensionNames, dimensions, fittingUnits, unitOf } from './units/dimensions.ts'
+export * from './units/display.ts'
+export type { UnitOfMeasure } from './units/measure.ts'
+export * from './units/money.ts'
+export { nearest } from './units/nearest.ts'
+export * from './units/parse.ts'
+export * from './units/quantity.ts'
