@@ -4,20 +4,34 @@ import type { Method } from './method.ts'
 import type { RateInto } from './problem.ts'
 
 /**
- * The difference of one whole and two half steps estimates the error of the fourth-order result,
- * but the run continues from the fifth-order extrapolation, which is far better.
+ * A step is accepted when two estimates of its error are at most so many tolerances. Both are of
+ * the fourth-order results, while the run continues from their fifth-order extrapolation, whose
+ * error is much smaller; so neither needs to be below one tolerance.
+ *
+ * The first compares one whole with two half steps. It may vanish by chance where the solution
+ * bends, and then lets through steps a thousand times too wrong; the second, Simpson's rule
+ * applied to the rates of the step, costs nothing more and vanishes elsewhere.
+ *
+ * Measured at tolerances 1e-4 to 1e-10: pure decay over five time constants ends 5 tolerances
+ * off; saturating decay in logarithms (213 problems, half-saturation from 1/100 to ten times the
+ * start, down to 1/1000 of it) 0.2 to 0.7 in the median, 22 at the 95th percentile, 94 at worst.
+ * Without the second estimate the same worst case was 600 to 2000.
  */
-const ACCEPTED_ESTIMATE = 10
+const ACCEPTED_DOUBLING = 5
+const ACCEPTED_SIMPSON = 50
 
-/** Length of a step times the stiffest rate constant at which damping is lost. */
-const STABILITY_LIMIT = 4
+/**
+ * Length of a step times the stiffest rate constant at which a decay is no longer damped:
+ * |16·R(z/2)² − R(z)|/15 = 1 at z = −6.459, R the classical method's stability function.
+ */
+const STABILITY_LIMIT = 6.459
 
 /**
  * Explicit method: classical Runge–Kutta by step doubling with local extrapolation.
  *
  * Shapes   one instance serves problems of one size, one at a time.
  * Source   Hairer, Nørsett & Wanner, Solving Ordinary Differential Equations I, II.4
- *          ("Richardson extrapolation"); E. Fehlberg's classical fourth-order steps.
+ *          ("Practical error estimation", Richardson extrapolation).
  */
 export const createDoubling = (size: number): Method => {
   const idle: RateInto = () => {}
@@ -27,8 +41,8 @@ export const createDoubling = (size: number): Method => {
   const fromRate = new Float64Array(size)
   const middle = new Float64Array(size)
   const middleRate = new Float64Array(size)
-  const endRate = new Float64Array(size)
   const next = new Float64Array(size)
+  const nextRate = new Float64Array(size)
   let rate = idle
   let relative = 0
   let absolute = 0
@@ -42,11 +56,18 @@ export const createDoubling = (size: number): Method => {
     whole.deriv = rate
     half.deriv = rate
   }
+  // The first stage of the second half step is the rate in the middle, wanted for the quintic.
+  const record: RateInto = (out, y, t) => {
+    rate(out, y, t)
+    for (let i = 0; i < size; i++) middleRate[i] = out[i] as number
+    half.deriv = rate
+  }
 
   return {
     exponent: 1 / 5,
-    memory: 0.04,
+    memory: 0,
     next,
+    nextRate,
     rateEvaluations: 0,
     jacobians: 0,
 
@@ -78,6 +99,7 @@ export const createDoubling = (size: number): Method => {
       half.deriv = replay
       half.step()
       for (let i = 0; i < size; i++) middle[i] = fine[i] as number
+      half.deriv = record
       half.step()
       this.rateEvaluations += 10
       let worst = 0
@@ -87,8 +109,23 @@ export const createDoubling = (size: number): Method => {
         next[i] = value
         const before = Math.abs(from[i] as number)
         const after = Math.abs(value)
-        const scale = ACCEPTED_ESTIMATE * (absolute + relative * Math.max(before, after))
+        const scale = ACCEPTED_DOUBLING * (absolute + relative * Math.max(before, after))
         const error = Math.abs(correction) / scale
+        if (!(error <= worst)) {
+          if (!(error < Number.POSITIVE_INFINITY)) return Number.POSITIVE_INFINITY
+          worst = error
+        }
+      }
+      if (!(worst <= 1)) return worst
+      rate(nextRate, next, t + h)
+      this.rateEvaluations += 1
+      for (let i = 0; i < size; i++) {
+        const before = Math.abs(from[i] as number)
+        const after = Math.abs(next[i] as number)
+        const scale = ACCEPTED_SIMPSON * (absolute + relative * Math.max(before, after))
+        const simpson =
+          (h / 6) * ((fromRate[i] as number) + 4 * (middleRate[i] as number) + (nextRate[i] as number))
+        const error = Math.abs((next[i] as number) - (from[i] as number) - simpson) / scale
         if (!(error <= worst)) {
           if (!(error < Number.POSITIVE_INFINITY)) return Number.POSITIVE_INFINITY
           worst = error
@@ -97,23 +134,20 @@ export const createDoubling = (size: number): Method => {
       return worst
     },
 
-    settle(fEnd) {
+    settle() {
       // Half of the correction belongs to each of the two half steps.
       const coarse = whole.y
       const fine = half.y
       for (let i = 0; i < size; i++) {
         middle[i] = (middle[i] as number) + ((fine[i] as number) - (coarse[i] as number)) / 30
-        endRate[i] = fEnd[i] as number
       }
-      rate(middleRate, middle, time + 0.5 * length)
-      this.rateEvaluations += 1
     },
 
     at(theta, out) {
-      quinticInto(out, theta, length, from, fromRate, middle, middleRate, next, endRate)
+      quinticInto(out, theta, length, from, fromRate, middle, middleRate, next, nextRate)
     },
 
-    strain(fEnd) {
+    strain() {
       // The two results of the step differ most along the stiffest direction; middleRate is free
       // here, because a step is settled only when it is interpolated.
       rate(middleRate, whole.y, time + length)
@@ -122,7 +156,7 @@ export const createDoubling = (size: number): Method => {
       let states = 0
       for (let i = 0; i < size; i++) {
         const scale = absolute + relative * Math.abs(next[i] as number)
-        const df = ((fEnd[i] as number) - (middleRate[i] as number)) / scale
+        const df = ((nextRate[i] as number) - (middleRate[i] as number)) / scale
         const dy = ((next[i] as number) - (whole.y[i] as number)) / scale
         rates += df * df
         states += dy * dy

@@ -2,9 +2,10 @@ import type { RateInto } from './problem.ts'
 
 /**
  * Local error of a step as long as the problem's own time scale, over the change it makes:
- * about 1/(5!·16), what the fifth derivative of an exponential contributes to two half steps.
+ * the fifth derivative of an exponential gives two half steps 1/1920, of which several tolerances
+ * are accepted.
  */
-const ERROR_PER_CHANGE = 1 / 200
+const ERROR_PER_CHANGE = 1 / 400
 
 /** How far the trial step that measures the curvature moves any component, of its magnitude. */
 const PROBE = 0.01
@@ -18,6 +19,10 @@ const PROBE = 0.01
  *          Wanner, Solving Ordinary Differential Equations I, II.4; but the time scale is
  *          |y′|/|y″|, where they take the unit of time for it and start far too short.
  */
+/** Longest time scale believed, in times to move by the magnitude of a component: curvatures may
+ * cancel by chance. */
+const LONGEST = 2
+
 export const firstStep = (
   rate: RateInto,
   t: number,
@@ -51,7 +56,7 @@ export const firstStep = (
   if (!(bend < Number.POSITIVE_INFINITY)) return h
   if (bend === 0) return span
   const change = slope * h > bend * h ? slope : bend
-  const scaleOfTime = (h * change) / bend
+  const scaleOfTime = Math.min((h * change) / bend, LONGEST / (slope * tightest))
   const step = scaleOfTime * Math.exp(-exponent * Math.log(ERROR_PER_CHANGE * change * scaleOfTime))
   return Math.min(step, span)
 }

@@ -3,6 +3,7 @@ import { createDoubling } from './doubling.ts'
 import { createDriver } from './driver.ts'
 import type { Method } from './method.ts'
 import type { Arrival, Control, IntegrationFailure, Problem } from './problem.ts'
+import { createRosenbrock } from './rosenbrock.ts'
 
 /** A workspace for problems of one size, to be used for any number of them one after another. */
 export interface Integrator {
@@ -20,12 +21,15 @@ export interface Integrator {
 export const createIntegrator = (size: number): Integrator => {
   const drive = createDriver(size)
   const explicit = createDoubling(size)
-  const implicit = (): Method => explicit
+  let implicit: Method | undefined
   return {
     size,
     run(problem, control) {
       check(size, problem, control)
-      return drive(problem, control, explicit, implicit)
+      return drive(problem, control, explicit, () => {
+        implicit ??= createRosenbrock(size)
+        return implicit
+      })
     },
   }
 }

@@ -9,8 +9,9 @@ export interface Method {
   readonly exponent: number
   /** Weight of the previous error in the step-size law; 0 for none. */
   readonly memory: number
-  /** State at the end of the latest attempt. */
+  /** State at the end of the latest attempt and, if that was good enough, the rate there. */
   readonly next: Float64Array
+  readonly nextRate: Float64Array
   /** Rate evaluations and Jacobians since `adopt`. */
   rateEvaluations: number
   jacobians: number
@@ -21,10 +22,10 @@ export interface Method {
    * the tolerance: ≤ 1 is good enough, not finite means the step left the domain of the rate.
    */
   attempt(t: number, h: number, y: Float64Array, f: Float64Array): number
-  /** Makes `at` ready for the latest attempt, whose end has the rate `fEnd`. */
-  settle(fEnd: Float64Array): void
+  /** Makes `at` ready for the latest attempt, which was good enough. */
+  settle(): void
   /** State at the fraction theta of the settled step. */
   at(theta: number, out: Float64Array): void
   /** How far the latest step reaches towards the limit of stability; ≥ 1 is at the limit. */
-  strain(fEnd: Float64Array): number
+  strain(): number
 }

@@ -5,6 +5,9 @@ const ENOUGH = 8
 /** …and so many others in a row clear it. */
 const CLEARED = 4
 
+/** Steps held short by stability waver about the limit, usually above this part of it. */
+const STRAINED = 0.6
+
 export interface StiffnessWatch {
   reset(): void
   due(accepted: number): boolean
@@ -28,7 +31,7 @@ export const createStiffnessWatch = (): StiffnessWatch => {
     },
     due: (accepted) => accepted % EVERY === 0,
     confirms(strain) {
-      if (strain >= 0.75) {
+      if (strain >= STRAINED) {
         strained++
         relaxed = 0
         return strained >= ENOUGH
