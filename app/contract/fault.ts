@@ -44,7 +44,7 @@ export const found = (value: unknown): string => {
     return Number.isFinite(value) ? String(value) : 'a number beyond the range of doubles'
   if (value === null || typeof value === 'boolean') return String(value)
   if (value === undefined) return 'nothing'
-  return Array.isArray(value) ? 'a list' : 'an object'
+  return Array.isArray(value) ? `a list of ${value.length}` : 'an object'
 }
 
 // Control characters, line and paragraph separators, direction marks, and halves of surrogate pairs.

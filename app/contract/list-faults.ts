@@ -7,6 +7,7 @@ export interface PlacedFault {
   readonly message: string
 }
 
+/** The most faults listed one by one. */
 export const mostFaults = 50
 
 /** Sorted by place, without repeats, the surplus counted in a last line. */

@@ -18,7 +18,9 @@ export interface ReadScenario {
   readonly source: unknown
 }
 
+/** The most bytes of a file. */
 export const largestFile = 5_000_000
+/** The most phases of a programme. */
 export const mostPhases = 1000
 
 /** Reads the bytes of a file. */

@@ -11,6 +11,7 @@ import type { ReadScenario } from './read-scenario.ts'
 import { cautions, checkMethodSentence, percent, remedySentence, warningSentence } from './sentences.ts'
 import { traceTable } from './trace-table.ts'
 
+/** What `plan` prints for people; `read` is what readScenario gave. */
 export const readableAnswer = (answer: Answer, read: ReadScenario): string => {
   const title = read.scenario.title
   const parts: (readonly string[])[] = [
@@ -97,7 +98,10 @@ const killSentences = (answer: Answer): readonly string[] =>
 
 const checkSentence = (answer: Answer): string => {
   const good = answer.precision === undefined ? '' : ` About ${answer.precision.digits} digits are good.`
-  return `Check by ${checkMethodSentence(answer.check.method)}: differs by ${formatNumber(answer.check.relativeDifference, 1)} of the value.${good}`
+  const { relativeDifference } = answer.check
+  if (relativeDifference === null)
+    return `Check by ${checkMethodSentence(answer.check.method)}: no result.${good}`
+  return `Check by ${checkMethodSentence(answer.check.method)}: differs by ${formatNumber(relativeDifference, 1)} of the value.${good}`
 }
 
 const cautionLines = (answer: Answer, read: ReadScenario): readonly string[] => {

@@ -34,16 +34,16 @@ export const warningSentence = (warning: Warning): string => {
       return `The programme holds for ${hours(warning.hold)}, but the target takes ${hours(warning.time)}.`
     case 'kill-step-incomplete':
       return `After the kill step ${percent(warning.residualActivity, 2)} of the enzyme charged is still active.`
-    case 'cold-assay-extrapolation':
-      return `The activity was measured at ${degrees(warning.from)} and is carried over to ${degrees(warning.to)} by the activation energy alone; an assay nearer to the process is worth having.`
+    case 'far-from-measured':
+      return `The rate was measured at ${degrees(warning.measured)} and is carried over to ${degrees(warning.used)}; an assay nearer to the process is worth having.`
     case 'routes-disagree':
       return `The two independent routes to this answer differ by ${percent(warning.relativeDifference, 2)}; do not rely on it before the cause is known.`
+    case 'check-failed':
+      return `The independent check gave up: ${gaveUp(warning.failure)}. The answer stands on one route alone.`
     case 'beyond-equilibrium':
       return `The target lies beyond the equilibrium, which is at ${percent(warning.equilibriumConversion)} conversion.`
     case 'very-long':
-      return `The time, ${hours(warning.time)}, is longer than a batch is usually held; constants measured over hours say little about it.`
-    case 'target-far-into-the-tail':
-      return `At the target only ${formatQuantity(warning.substrate, 'concentration', 'g/L', 2)} of substrate remain, far below Km; small errors of the rate law count for much there.`
+      return `The time, ${hours(warning.time)}, is longer than anybody waits; take it as "not in practice".`
     default:
       return warning satisfies never
   }
@@ -67,6 +67,8 @@ export const remedySentence = (remedy: Remedy): string => {
       return `At pH ${formatNumber(remedy.pH)} ${takes}.`
     case 'longer-hold':
       return `Held ${hours(remedy.extra)} longer the batch makes it: ${takes}.`
+    case 'sooner':
+      return `With all doses given at the start ${takes}.`
     case 'staged':
       return `With ${remedy.doses} doses of ${kilograms(remedy.each)}, one every ${hours(remedy.every)}, ${takes}.`
     default:
@@ -109,8 +111,6 @@ export const checkMethodSentence = (method: CheckMethod): string => {
       return 'step-by-step integration in logarithms, explicit'
     case 'ode-log-implicit':
       return 'step-by-step integration in logarithms, implicit'
-    case 'separation':
-      return 'separation of variables'
     default:
       return method satisfies never
   }
@@ -129,6 +129,21 @@ export const failureSentence = (failure: PlanFailure): string => {
       return `${failure.what} lies beyond the range of double-precision numbers`
     default:
       return failure satisfies never
+  }
+}
+
+const gaveUp = (kind: PlanFailure['kind']): string => {
+  switch (kind) {
+    case 'rate-not-finite':
+      return 'its rate stopped being a finite number'
+    case 'step-too-small':
+      return 'its steps became too small'
+    case 'too-many-steps':
+      return 'it took too many steps'
+    case 'beyond-doubles':
+      return 'a number left the range of doubles'
+    default:
+      return kind satisfies never
   }
 }
 

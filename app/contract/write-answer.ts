@@ -46,7 +46,8 @@ export const writeAnswer = (answer: Answer, read: ReadScenario): JsonObject =>
     trace: map(answer.trace, writeTrace),
     check: {
       method: answer.check.method,
-      relativeDifference: finite(answer.check.relativeDifference),
+      relativeDifference:
+        answer.check.relativeDifference === null ? null : finite(answer.check.relativeDifference),
     },
     hours: map(answer.hours, writeHours),
     remedies: map(answer.remedies, (remedies) => remedies.map(writeRemedy)),

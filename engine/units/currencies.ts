@@ -12,4 +12,5 @@ const codes =
   'SZL THB TJS TMT TND TOP TRY TTD TWD TZS UAH UGX USD USN UYI UYU UYW UZS VED VES VND VUV WST XAF XCD XCG XDR ' +
   'XOF XPF YER ZAR ZMW ZWG'
 
+/** The codes money may be in. */
 export const currencyCodes: ReadonlySet<string> = new Set(codes.split(' '))

@@ -3,7 +3,7 @@ import * as z from 'zod'
 import { parseQuantity, type Time } from '../../../engine/index.ts'
 import { found } from '../fault.ts'
 import { quantitySentence } from '../words/quantity-words.ts'
-import { always, complain } from './clashes.ts'
+import { complain, onList } from './clashes.ts'
 import { conversionField, quantityField, quantityPattern, rangeSentence, record } from './fields.ts'
 
 const within = quantityField('time', 'above', { title: 'reaction time from the first dose' })
@@ -26,7 +26,7 @@ const between = z
         'the first temperature is not below the second; between goes from the lower to the higher',
       )
     }
-  }, always)
+  }, onList)
 
 const longestTrace = 1_000_000
 const due = { called: 'a time', units: ['h', 'min', 's', 'd'], example: '1 h' }
@@ -89,6 +89,7 @@ const temperature = z.discriminatedUnion(
   },
 )
 
+/** The question of a file; what a later version answers is named as such. */
 export const ask = z.discriminatedUnion(
   'find',
   [

@@ -1,8 +1,12 @@
 /** Rules on which keys of one object go together. */
 import type * as z from 'zod'
+import { fieldsOf } from '../rules/view.ts'
 
-/** Rules run even where a part could not be read, so that one pass names every fault. */
-export const always = { when: () => true }
+/** Rules on an object run even where a part of it could not be read, so that one pass names every fault. */
+export const onObject = { when: (read: { readonly value: unknown }) => fieldsOf(read.value) !== undefined }
+
+/** The same for a list. */
+export const onList = { when: (read: { readonly value: unknown }) => Array.isArray(read.value) }
 
 /** Says something about the object itself, or about one of its keys. */
 export const complain = (ctx: z.core.$RefinementCtx, message: string, ...path: (string | number)[]): void =>

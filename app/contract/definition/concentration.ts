@@ -7,6 +7,7 @@ export type GivenConcentration =
   | { readonly by: 'mass'; readonly value: Concentration }
   | { readonly by: 'amount'; readonly value: Quantity<'molar concentration'> }
 
+/** A concentration by mass or molar. */
 export const concentrationField = (title: string, range: Range, example = '45 g/L') =>
   eitherField(
     ['concentration', 'molar concentration'],

@@ -6,11 +6,12 @@ import {
   quantity,
   type VolumetricActivity,
 } from '../../../engine/index.ts'
-import { always, complain, exactlyOne, given, needs } from './clashes.ts'
+import { complain, exactlyOne, given, needs, onObject } from './clashes.ts'
 import { concentrationField } from './concentration.ts'
 import { eitherField, numberField, phField, quantityField, record, textField } from './fields.ts'
 import { inactivation } from './inactivation.ts'
 
+/** Temperature and, where something follows it, pH. */
 export const conditions = (title: string) =>
   record(title, {
     temperature: quantityField('temperature', 'above', { title: 'temperature' }),
@@ -64,7 +65,7 @@ const rate = record('the rate law and its constants', {
         'a specificRate needs the temperature (and pH) at which it holds',
       )
     }
-  }, always)
+  }, onObject)
   .meta({
     oneOf: [
       { required: ['specificRate', 'reference'], not: { required: ['activity'] } },
@@ -99,7 +100,7 @@ const temperature = record('how the rate follows the temperature', {
       if (given(value, ['Ea', 'from']).length === 2)
         complain(ctx, 'found from beside Ea; from belongs to Q10')
     }
-  }, always)
+  }, onObject)
   .meta({
     oneOf: [
       { required: ['Ea'], not: { anyOf: [{ required: ['Q10'] }, { required: ['from'] }] } },
@@ -107,6 +108,7 @@ const temperature = record('how the rate follows the temperature', {
     ],
   })
 
+/** The two constants of a bell over pH. */
 export const pkPair = {
   pKa1: numberField('pKa1, the acid side of the bell'),
   pKa2: numberField('pKa2, the alkaline side of the bell'),
@@ -131,7 +133,7 @@ const pH = record('how the rate follows the pH', {
           complain(ctx, 'is missing; the bell needs pKa1 and pKa2 as plain numbers', key)
       }
     }
-  }, always)
+  }, onObject)
   .meta({
     oneOf: [
       { required: ['pKa1', 'pKa2'], not: { anyOf: [{ required: ['free'] }, { required: ['complex'] }] } },
@@ -139,6 +141,7 @@ const pH = record('how the rate follows the pH', {
     ],
   })
 
+/** `enzyme` of the file. */
 export const enzyme = record('the enzyme preparation', {
   name: textField('name of the preparation').exactOptional(),
   form: textField('liquid, powder …').exactOptional(),

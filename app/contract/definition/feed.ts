@@ -1,6 +1,6 @@
 /** What is in the vessel before the enzyme. */
 
-import { always, complain, given, listed, needs } from './clashes.ts'
+import { complain, given, listed, needs, onObject } from './clashes.ts'
 import { concentrationField } from './concentration.ts'
 import { numberField, quantityField, record, textField } from './fields.ts'
 
@@ -49,7 +49,7 @@ const product = record('the product that inhibits', {
         'molarMass',
         'molesPerSubstrate needs the molar mass of the product',
       )
-  }, always)
+  }, onObject)
   .meta({
     oneOf: [
       {
@@ -60,6 +60,7 @@ const product = record('the product that inhibits', {
     ],
   })
 
+/** `feed` of the file. */
 export const feed = record('what is charged before the enzyme', {
   volume: quantityField('volume', 'above', { title: 'volume charged' }),
   substrate,

@@ -1,7 +1,7 @@
 /** How heat (and pH) takes the enzyme away: one step, or two in series. */
 import * as z from 'zod'
 import { found } from '../fault.ts'
-import { always, complain, exactlyOne, given, listed } from './clashes.ts'
+import { complain, exactlyOne, given, listed, onList, onObject } from './clashes.ts'
 import { concentrationField } from './concentration.ts'
 import { numberField, phField, quantityField, record } from './fields.ts'
 
@@ -43,7 +43,7 @@ const seriesStep = record('one step of inactivation', {
   ...stepFields,
   residual: numberField('activity of the form after this step beside the native one', { atLeast: 0 }),
 })
-  .superRefine(stepRules, always)
+  .superRefine(stepRules, onObject)
   .meta({ allOf: [{ oneOf: oneOfRates }, { oneOf: oneOfSlopes }] })
 
 const series = z
@@ -57,9 +57,10 @@ const series = z
         `found a list of ${value.length}; series is a list of two steps, the first and the second`,
       )
     }
-  }, always)
+  }, onList)
   .meta({ description: 'two steps in series', minItems: 2, maxItems: 2 })
 
+/** `enzyme.inactivation` of the file. */
 export const inactivation = record('how the enzyme is lost', {
   ...stepFields,
   at: stepFields.at.exactOptional(),
@@ -80,7 +81,7 @@ export const inactivation = record('how the enzyme is lost', {
     } else if (single.length > 0) {
       complain(ctx, `found series beside ${listed(single, 'and')}; give one step, or a series of two`)
     }
-  }, always)
+  }, onObject)
   .meta({
     oneOf: [
       {

@@ -1,7 +1,8 @@
 /** What things cost, and how much constants and charges scatter. */
-import { always, complain } from './clashes.ts'
+import { complain, onObject } from './clashes.ts'
 import { moneyField, numberField, quantityField, record } from './fields.ts'
 
+/** `costs` of the file. */
 export const costs = record('what a batch costs', {
   enzyme: moneyField('mass', { title: 'price of the preparation', example: '30 EUR/kg' }).exactOptional(),
   vessel: moneyField('time', { title: 'cost of the vessel', example: '85 EUR/h' }).exactOptional(),
@@ -19,11 +20,12 @@ export const costs = record('what a batch costs', {
       'vessel',
     )
   }
-}, always)
+}, onObject)
 
 const relative = (what: string) =>
   numberField(`relative standard deviation of ${what}`, { atLeast: 0 }).exactOptional()
 
+/** `spreads` of the file. */
 export const spreads = record('how much things scatter', {
   rate: relative('the rate'),
   Km: relative('Km'),

@@ -2,7 +2,7 @@
 import * as z from 'zod'
 import { type FeedFlow, type Flow, type MassFlow, quantity } from '../../../engine/index.ts'
 import { found } from '../fault.ts'
-import { always, complain, given } from './clashes.ts'
+import { complain, given, onObject } from './clashes.ts'
 import { concentrationField } from './concentration.ts'
 import { conversionField, eitherField, phField, quantityField, record } from './fields.ts'
 
@@ -56,7 +56,7 @@ const hold = record('holding', {
     } else if (length.length === 0 && !goal.includes('until')) {
       complain(ctx, 'is missing; atMost goes with until, such as { "conversion": 0.9 }', 'until')
     }
-  }, always)
+  }, onObject)
   .meta({
     oneOf: [
       { required: ['for'], not: { anyOf: [{ required: ['until'] }, { required: ['atMost'] }] } },
@@ -96,6 +96,7 @@ const adjust = record('adjusting the pH', { phase: z.literal('adjust'), pH: phFi
 
 const known = ['heat', 'dose', 'hold', 'feed', 'adjust', 'inactivate', 'cool']
 
+/** One of `programme.phases`. */
 export const phase = z.discriminatedUnion('phase', [heat, dose, hold, feedPhase, adjust, inactivate, cool], {
   error: (issue) => {
     if (issue.code !== 'invalid_union') return `found ${found(issue.input)}; a phase is an object`

@@ -1,7 +1,7 @@
 /** What is done with the batch: the short form, or phases in order. */
 import * as z from 'zod'
 import { found } from '../fault.ts'
-import { always, complain, given, listed } from './clashes.ts'
+import { complain, given, listed, onObject } from './clashes.ts'
 import { conditions } from './enzyme.ts'
 import { flagField, phField, quantityField, record } from './fields.ts'
 import { phase } from './phases.ts'
@@ -9,6 +9,7 @@ import { phase } from './phases.ts'
 const shortKeys = ['temperature', 'pH', 'dose', 'hold'] as const
 const phaseKeys = ['start', 'phases'] as const
 
+/** `programme` of the file. */
 export const programme = record('what is done with the batch', {
   temperature: quantityField('temperature', 'above', {
     title: 'temperature held throughout',
@@ -48,7 +49,7 @@ export const programme = record('what is done with the batch', {
       complain(ctx, 'is missing; phases need the conditions they start from', 'start')
     if (!phased.includes('phases'))
       complain(ctx, 'is missing; start needs a list of phases after it', 'phases')
-  }, always)
+  }, onObject)
   .meta({
     oneOf: [
       { required: ['temperature'], not: { anyOf: phaseKeys.map((key) => ({ required: [key] })) } },

@@ -7,7 +7,7 @@ import * as z from 'zod'
 import { found } from '../fault.ts'
 import { scenarioRules } from '../rules/scenario-rules.ts'
 import { ask } from './ask.ts'
-import { always } from './clashes.ts'
+import { onObject } from './clashes.ts'
 import { enzyme } from './enzyme.ts'
 import { feed } from './feed.ts'
 import { record, textField } from './fields.ts'
@@ -22,6 +22,7 @@ const exactly = <V extends string | number>(value: V, otherwise: string) =>
         : `found ${found(issue.input)}; ${otherwise}`,
   })
 
+/** The whole file. */
 export const scenarioFile = record('a scenario', {
   format: exactly('dosewright-scenario', 'a scenario file says "dosewright-scenario"'),
   version: exactly(1, 'this program reads version 1'),
@@ -32,6 +33,6 @@ export const scenarioFile = record('a scenario', {
   costs: costs.exactOptional(),
   spreads: spreads.exactOptional(),
   ask,
-}).superRefine(scenarioRules, always)
+}).superRefine(scenarioRules, onObject)
 
 export type ScenarioFile = z.output<typeof scenarioFile>

@@ -9,6 +9,7 @@
 import type { PathStep } from '../fault.ts'
 import { endOfNumber, endOfString, endOfWord, type SyntaxFault, skipSpace, strange } from './tokens.ts'
 
+/** The most levels of objects and lists in one another. */
 export const deepestNesting = 64
 
 export interface Walked {
@@ -19,6 +20,7 @@ export interface Walked {
 /** Hears each value, its path and where it begins (for a key's value, where the key begins). */
 export type Visitor = (path: readonly PathStep[], at: number) => void
 
+/** Walks a text, and tells a visitor of each value if there is one. */
 export const walkJson = (text: string, visit?: Visitor): Walked => {
   const repeated: (readonly PathStep[])[] = []
   const stop = (at: number, message: string): Walked => ({ fault: { at, message }, repeated })

@@ -4,8 +4,8 @@ import { visible } from '../fault.ts'
 
 /** Why a key may not stand in an object with these known ones. */
 export const unknownKeySentence = (key: string, known: readonly string[]): string => {
-  const later = laterKeys[key]
-  if (later !== undefined && Object.hasOwn(laterKeys, key) && known.includes('find')) return later
+  const later = known.includes('find') && Object.hasOwn(laterKeys, key) ? laterKeys[key] : undefined
+  if (later !== undefined) return later
   const near = nearest(key, known)
   const offer = near === undefined ? `known here: ${known.join(', ')}` : `the nearest known one is "${near}"`
   return `the key "${visible(key)}" is not known here; ${offer}`
