@@ -1,6 +1,6 @@
 /** What a plan answers, in SI; sentences and units of display are the reader's business. */
 import type { Ask } from './scenario.ts'
-import type { Concentration, Mass, Temperature, Time } from './units/quantity.ts'
+import type { Mass, Temperature, Time } from './units/quantity.ts'
 
 export interface Answer {
   readonly ask: Ask
@@ -33,10 +33,12 @@ export interface Answer {
 /** The same answer by an independent route. */
 export interface Check {
   readonly method: CheckMethod
-  readonly relativeDifference: number
+  /** Null when the checking route gave up; a warning says why. */
+  readonly relativeDifference: number | null
 }
 
-export type CheckMethod = 'ode-log-explicit' | 'ode-log-implicit' | 'separation'
+/** Integration in logarithms, by explicit steps or by implicit ones. */
+export type CheckMethod = 'ode-log-explicit' | 'ode-log-implicit'
 
 /** Columns of one length; the state at the moment of a dose is the one after it. */
 export interface Trace {
@@ -77,6 +79,8 @@ export type Remedy =
   | { readonly kind: 'less-inhibition'; readonly time: Time }
   | { readonly kind: 'better-pH'; readonly pH: number; readonly time: Time }
   | { readonly kind: 'longer-hold'; readonly extra: Time; readonly time: Time }
+  /** All doses given at the programme's start. */
+  | { readonly kind: 'sooner'; readonly time: Time }
   | {
       readonly kind: 'staged'
       readonly doses: number
@@ -100,15 +104,19 @@ export interface Work {
 }
 
 export type Warning =
+  /** Few digits are left: the answer hangs on the last per mille of the constants. */
   | { readonly code: 'near-the-edge'; readonly amplification: number; readonly digits: number }
   | { readonly code: 'optimum-at-bound'; readonly temperature: Temperature }
   | { readonly code: 'hold-shorter-than-time'; readonly hold: Time; readonly time: Time }
   | { readonly code: 'kill-step-incomplete'; readonly residualActivity: number }
-  | { readonly code: 'cold-assay-extrapolation'; readonly from: Temperature; readonly to: Temperature }
+  /** The reaction runs far from the temperature at which the rate was measured. */
+  | { readonly code: 'far-from-measured'; readonly measured: Temperature; readonly used: Temperature }
   | { readonly code: 'routes-disagree'; readonly relativeDifference: number }
+  /** The checking route gave up. */
+  | { readonly code: 'check-failed'; readonly failure: PlanFailure['kind'] }
   | { readonly code: 'beyond-equilibrium'; readonly equilibriumConversion: number }
+  /** Longer than anybody waits: over a year. */
   | { readonly code: 'very-long'; readonly time: Time }
-  | { readonly code: 'target-far-into-the-tail'; readonly substrate: Concentration }
 
 /** Why there is no answer. */
 export type PlanFailure =

@@ -1,6 +1,7 @@
 /** The door: everything the app may use of the engine. */
 export type * from './answer.ts'
 export * from './outcome.ts'
+export { plan } from './plan.ts'
 export type * from './scenario.ts'
 export { currencyCodes } from './units/currencies.ts'
 export { type DimensionName, dimensionNames, dimensions, fittingUnits, unitOf } from './units/dimensions.ts'

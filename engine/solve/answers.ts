@@ -1,0 +1,80 @@
+/** What every answer is built from: the check, the work, the balance, the warnings that any ask may raise. */
+import type { Answer, Check, KillStep, Warning, Work } from '../answer.ts'
+import type { Outcome } from '../outcome.ts'
+import type { Scenario } from '../scenario.ts'
+import { quantity, type Temperature } from '../units/quantity.ts'
+import { measuredAt } from './enzyme-model.ts'
+import type { BatchRun, BatchState, RouteFailure } from './route.ts'
+import type { Solver } from './solver.ts'
+import { holdTemperature } from './variants.ts'
+
+/** An answer without the ask it belongs to. */
+export type AnswerBody = Omit<Answer, 'ask'>
+
+/** Two routes further apart than this, relative, are worth a warning. */
+const agreement = 1e-6
+/** Further than this from the temperature of measurement an Arrhenius law is a guess; common practice. */
+const farFromMeasured = 25
+
+/** Compares two numbers that should be one. */
+export function checkOf(solver: Solver, answer: number, other: number | null): Check {
+  const scale = Math.max(Math.abs(answer), 1e-300)
+  return {
+    method: solver.checkMethod,
+    relativeDifference: other === null ? null : Math.abs(other - answer) / scale,
+  }
+}
+
+/** Warnings about the check. */
+export function checkWarnings(check: Check, factor = 1): Warning[] {
+  const { relativeDifference } = check
+  if (relativeDifference === null) return []
+  return relativeDifference > agreement * Math.max(1, factor)
+    ? [{ code: 'routes-disagree', relativeDifference }]
+    : []
+}
+
+/** The warning that the checking route gave up, if it did. */
+export const gaveUp = (route: Outcome<unknown, RouteFailure>): Warning[] =>
+  route.ok ? [] : [{ code: 'check-failed', failure: route.failure.kind }]
+
+/** Warnings about the conditions. */
+export function conditionWarnings(scenario: Scenario): Warning[] {
+  const measured = measuredAt(scenario.enzyme.rate).temperature
+  const used = holdTemperature(scenario.programme)
+  return Math.abs(used - measured) > farFromMeasured
+    ? [{ code: 'far-from-measured', measured, used: quantity<Temperature>(used) }]
+    : []
+}
+
+/** Largest relative drift of substrate + product/yield over the states of a batch. */
+export const massBalanceOf = (states: readonly BatchState[]): number =>
+  states.reduce((worst, { imbalance }) => Math.max(worst, Math.abs(imbalance)), 0)
+
+/** What a kill step leaves, from a run through the whole programme. */
+export function killStepOf(scenario: Scenario, run: BatchRun): KillStep | undefined {
+  if (scenario.programme.kind !== 'phases') return undefined
+  const { phases } = scenario.programme
+  const kills = run.marks.filter(({ phase }) => phases[phase]?.phase === 'inactivate')
+  const first = kills[0]
+  const last = kills[kills.length - 1]
+  if (!first || !last || !(first.enzymeFrom > 0)) return undefined
+  // Below 1e-300 a double has nothing left to divide.
+  const left = Math.max(last.enzymeTo, 1e-300 * first.enzymeFrom)
+  return {
+    residualActivity: last.enzymeTo / run.dosed,
+    logReduction: -Math.log10(left / first.enzymeFrom),
+  }
+}
+
+/** Work of several runs together. */
+export const workOf = (...runs: readonly { readonly work: Work }[]): Work =>
+  runs.reduce<Work>(
+    (sum, { work }) => ({
+      stepsAccepted: sum.stepsAccepted + work.stepsAccepted,
+      stepsRejected: sum.stepsRejected + work.stepsRejected,
+      rateEvaluations: sum.rateEvaluations + work.rateEvaluations,
+      jacobians: sum.jacobians + work.jacobians,
+    }),
+    { stepsAccepted: 0, stepsRejected: 0, rateEvaluations: 0, jacobians: 0 },
+  )

@@ -1,0 +1,71 @@
+/** The hold temperature at which a batch is done soonest, or comes furthest in a given time. */
+import { type Minimum, minimum } from '../numeric/minimum.ts'
+import type { Scenario } from '../scenario.ts'
+import { timeTo } from './reach.ts'
+import type { Route } from './route.ts'
+import { supplyUntil } from './separation.ts'
+import { type Solver, solverOf } from './solver.ts'
+import { atHoldTemperature } from './variants.ts'
+
+/** What is sought: the shortest time to a conversion, or the highest conversion within a time. */
+export type Aim = { readonly conversion: number } | { readonly within: number }
+
+/**
+ * The best hold temperature between two bounds, K.
+ *
+ * Shapes   null where the aim is met at no temperature between them. `value` is ln of the time, or a measure that
+ *          falls as the conversion rises.
+ */
+export function bestTemperature(scenario: Scenario, aim: Aim, low: number, high: number): Minimum | null {
+  return minimum((T) => badness(solverOf(atHoldTemperature(scenario, T)), aim), low, high)
+}
+
+/** How the checking route sees the optimum: sought in a narrow window around the answer, K. */
+export function checkedTemperature(
+  scenario: Scenario,
+  aim: Aim,
+  near: number,
+  low: number,
+  high: number,
+): number | null {
+  const half = Math.min(2, Math.max(0.05, 0.25 * (high - low)))
+  const from = Math.max(low, near - half)
+  const to = Math.min(high, near + half)
+  const found = minimum(
+    (T) => {
+      const solver = solverOf(atHoldTemperature(scenario, T))
+      return byRoute(solver.checks, solver, aim)
+    },
+    from,
+    to,
+    8,
+    1e-6,
+  )
+  return found && (!found.atBound || found.at === low || found.at === high) ? found.at : null
+}
+
+function badness(solver: Solver, aim: Aim): number {
+  if ('conversion' in aim) return finiteLog(timeTo(solver, aim.conversion))
+  const conditional = solver.batch.timeline.steps.some(
+    (step) => step.kind === 'run' && step.until !== undefined,
+  )
+  if (solver.separable && !conditional) {
+    // The supply has its optimum where the conversion has, and keeps its digits when nearly all is converted.
+    const supply = supplyUntil(solver.batch, solver.firstDoseAt + aim.within, false)
+    return supply.ok ? -finiteLog(supply.value) : Number.POSITIVE_INFINITY
+  }
+  return byRoute(solver.answers, solver, aim)
+}
+
+function byRoute(route: Route, solver: Solver, aim: Aim): number {
+  if ('conversion' in aim) {
+    const run = route({ doseScale: 1, target: aim.conversion, endless: false })
+    if (!run.ok || run.value.reachedAt === undefined) return Number.POSITIVE_INFINITY
+    return finiteLog(run.value.reachedAt - run.value.firstDoseAt)
+  }
+  const run = route({ doseScale: 1, until: solver.firstDoseAt + aim.within, endless: false })
+  return run.ok ? finiteLog(run.value.end.substrate * run.value.end.volume) : Number.POSITIVE_INFINITY
+}
+
+const finiteLog = (x: number): number =>
+  x > 0 && x < Number.POSITIVE_INFINITY ? Math.log(x) : x === 0 ? -745 : Number.POSITIVE_INFINITY

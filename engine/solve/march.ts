@@ -1,0 +1,104 @@
+/**
+ * Takes a batch through the steps of a programme: doses, pieces, conditional holds, wanted times. How a piece is
+ * passed is the mover's business.
+ */
+import type { Work } from '../answer.ts'
+import { failed, type Outcome, success } from '../outcome.ts'
+import type { Batch, BatchRun, BatchState, PhaseMark, RouteFailure, RunRequest } from './route.ts'
+import type { Run } from './timeline.ts'
+
+/** A batch in motion; `advance` mutates it. */
+export interface Mover {
+  readonly dose: (mass: number) => void
+  /**
+   * Passes `length` s of a run, or less if the conversion `stopAt` is reached within; `outputs` are times from the
+   * run's start. Ends at Infinity in the state of rest.
+   */
+  readonly advance: (
+    run: Run,
+    length: number,
+    stopAt: number | undefined,
+    outputs: readonly number[],
+  ) => Outcome<Advance, RouteFailure>
+  readonly conversion: () => number
+  /** kg of active preparation */
+  readonly activeEnzyme: () => number
+  readonly state: (time: number, run: Run, elapsed: number) => BatchState
+  readonly work: () => Work
+}
+
+export interface Advance {
+  /** s */
+  readonly elapsed: number
+  readonly stopped: boolean
+  /** States at those `outputs` that are not later than `elapsed`; times from the run's start. */
+  readonly outputs: readonly BatchState[]
+}
+
+/** Two moments nearer than this are the same one, s. */
+export const sameMoment = 1e-6
+
+/** Runs a programme; the target, the time limit or the end of the steps stops it. */
+export function march(batch: Batch, mover: Mover, request: RunRequest): Outcome<BatchRun, RouteFailure> {
+  const { timeline } = batch
+  const { target, until = Number.POSITIVE_INFINITY } = request
+  const wanted = request.outputs ?? []
+  const outputs: BatchState[] = []
+  const marks: PhaseMark[] = []
+  const endless = request.endless || timeline.endless
+  let time = 0
+  let firstDoseAt = Number.NaN
+  let dosed = 0
+  let last: Run = timeline.after
+  let elapsedInLast = 0
+  const finish = (reachedAt?: number): Outcome<BatchRun, RouteFailure> =>
+    success({
+      ...(reachedAt !== undefined && { reachedAt }),
+      firstDoseAt,
+      dosed,
+      end: mover.state(time, last, elapsedInLast),
+      outputs,
+      marks,
+      work: mover.work(),
+    })
+  const steps = endless ? [...timeline.steps, timeline.after] : timeline.steps
+  for (const step of steps) {
+    if (step.kind === 'dose') {
+      if (Number.isNaN(firstDoseAt)) firstDoseAt = time
+      const mass = step.mass * request.doseScale
+      mover.dose(mass)
+      dosed += mass
+      continue
+    }
+    if (target !== undefined && mover.conversion() >= target && !Number.isNaN(firstDoseAt))
+      return finish(time)
+    if (time >= until) break
+    const length = Math.min(step.duration, until - time)
+    const stops = [target, step.until].filter((x) => x !== undefined)
+    const stopAt = stops.length ? Math.min(...stops) : undefined
+    const from = time
+    const enzymeFrom = mover.activeEnzyme()
+    const due: number[] = []
+    for (const at of wanted.slice(outputs.length)) {
+      if (at - from > length - sameMoment && step !== timeline.after && length === step.duration) break
+      if (at - from > length + sameMoment) break
+      due.push(Math.min(length, Math.max(0, at - from)))
+    }
+    const passed = mover.advance(step, length, stopAt, due)
+    if (!passed.ok) return failed(passed.failure)
+    const { elapsed, stopped } = passed.value
+    for (const state of passed.value.outputs) {
+      if (stopped && state.time > elapsed - sameMoment) break
+      outputs.push({ ...state, time: wanted[outputs.length] ?? state.time })
+    }
+    time = from + elapsed
+    last = step
+    elapsedInLast = elapsed
+    marks.push({ phase: step.phase, from, to: time, enzymeFrom, enzymeTo: mover.activeEnzyme() })
+    if (stopped && target !== undefined && stopAt === target) return finish(time)
+  }
+  if (target !== undefined && mover.conversion() >= target) return finish(time)
+  while (outputs.length < wanted.length && (wanted[outputs.length] as number) <= time + sameMoment)
+    outputs.push(mover.state(wanted[outputs.length] as number, last, elapsedInLast))
+  return finish()
+}

@@ -1,0 +1,146 @@
+/** What would shorten the hold, or make an unreachable target reachable; each computed, none guessed. */
+import type { Remedy } from '../answer.ts'
+import type { Phase, Scenario } from '../scenario.ts'
+import { type Mass, quantity, type Temperature, type Time } from '../units/quantity.ts'
+import { bestTemperature } from './best-temperature.ts'
+import { doseScaleFor, leastDoseScale } from './dose.ts'
+import { timeTo } from './reach.ts'
+import { type Solver, solverOf } from './solver.ts'
+import { atHoldTemperature, atPh, dosedAtOnce, holdTemperature, withHalfTheInhibition } from './variants.ts'
+
+/** The changes whose effect on the hold is compared: common practice for one step of a plan. */
+const doseStep = 1.2
+const temperatureStep = 3
+const targetStep = 0.02
+
+/** Changes that shorten the hold of a reachable plan, the strongest first. */
+export function shorteningRemedies(
+  scenario: Scenario,
+  solver: Solver,
+  conversion: number,
+  { time, dosed }: { readonly time: number; readonly dosed: number },
+): Remedy[] {
+  const found: Remedy[] = []
+  const consider = (remedy: Remedy): void => {
+    if (remedy.time < time * (1 - 1e-6)) found.push(remedy)
+  }
+  const t = (changed: Solver, target = conversion, scale = 1): Time =>
+    quantity<Time>(timeTo(changed, target, scale))
+  const dose = quantity<Mass>(dosed * doseStep)
+  consider({ kind: 'more-dose', dose, time: t(solver, conversion, doseStep) })
+  const hold = holdTemperature(scenario.programme)
+  for (const [kind, step] of [
+    ['cooler', -temperatureStep],
+    ['warmer', temperatureStep],
+  ] as const) {
+    const temperature = quantity<Temperature>(hold + step)
+    if (temperature > 0)
+      consider({ kind, temperature, time: t(solverOf(atHoldTemperature(scenario, temperature))) })
+  }
+  const lower = conversion - Math.min(targetStep, 0.1 * conversion)
+  consider({ kind: 'lower-target', conversion: lower, time: t(solver, lower) })
+  const { Kic, Kiu } = scenario.enzyme.rate
+  if (Kic !== undefined || Kiu !== undefined)
+    consider({ kind: 'less-inhibition', time: t(solverOf(withHalfTheInhibition(scenario))) })
+  const pH = solver.batch.model.bestPh
+  if (pH !== undefined && pH >= 0 && pH <= 14)
+    consider({ kind: 'better-pH', pH, time: t(solverOf(atPh(scenario, pH))) })
+  return found.sort((a, b) => a.time - b.time)
+}
+
+/** A dose this much above the least one reaches the target without hanging on the last digit. */
+const margin = 1.1
+const mostDoses = 24
+
+/** Changes that make an unreachable target reachable, the quickest first. */
+export function reachabilityRemedies(scenario: Scenario, solver: Solver, conversion: number): Remedy[] {
+  const found: Remedy[] = []
+  const consider = (remedy: Remedy): void => {
+    if (Number.isFinite(remedy.time) && remedy.time >= 0) found.push(remedy)
+  }
+  const scale = sufficientScale(solver, conversion)
+  if (scale !== undefined) {
+    const dose = quantity<Mass>(solver.fullDose * scale * margin)
+    consider({ kind: 'more-dose', dose, time: quantity<Time>(timeTo(solver, conversion, scale * margin)) })
+    const staged = stagedDoses(scenario, solver, conversion, scale)
+    if (staged) consider(staged)
+  }
+  const hold = holdTemperature(scenario.programme)
+  const best = bestTemperature(scenario, { conversion }, Math.max(1, hold - 40), hold + 20)
+  if (best) {
+    const temperature = quantity<Temperature>(best.at)
+    consider({
+      kind: best.at < hold ? 'cooler' : 'warmer',
+      temperature,
+      time: quantity<Time>(Math.exp(best.value)),
+    })
+  }
+  if (scenario.programme.kind === 'phases') {
+    const sooner = solverOf(dosedAtOnce(dosedFirst(scenario)))
+    consider({ kind: 'sooner', time: quantity<Time>(timeTo(sooner, conversion)) })
+    const endless = solver.answers({ doseScale: 1, target: conversion, endless: true })
+    const whole = solver.answers({ doseScale: 1, endless: false })
+    if (endless.ok && whole.ok && endless.value.reachedAt !== undefined) {
+      const extra = quantity<Time>(endless.value.reachedAt - whole.value.end.time)
+      consider({
+        kind: 'longer-hold',
+        extra,
+        time: quantity<Time>(endless.value.reachedAt - endless.value.firstDoseAt),
+      })
+    }
+  }
+  return found.sort((a, b) => a.time - b.time)
+}
+
+/** Factor on the doses with which the programme, or the endless hold, gets there. */
+function sufficientScale(solver: Solver, conversion: number): number | undefined {
+  if (solver.batch.timeline.endless) {
+    const least = leastDoseScale(solver, conversion)
+    return least.ok && least.value !== null ? least.value : undefined
+  }
+  const scale = doseScaleFor(solver, conversion, Number.POSITIVE_INFINITY)
+  return scale.ok && scale.value.kind === 'scale' ? scale.value.scale : undefined
+}
+
+/** The stated dose again and again, one every half-life, until enough has been given; constant conditions only. */
+function stagedDoses(
+  scenario: Scenario,
+  solver: Solver,
+  conversion: number,
+  scale: number,
+): Remedy | undefined {
+  const { programme } = scenario
+  const { inactivation } = solver.batch.model
+  if (programme.kind !== 'constant' || !inactivation) return undefined
+  const every = quantity<Time>(Math.LN2 / inactivation.k1(programme.pH)(programme.temperature))
+  const doses = Math.ceil(scale * margin)
+  if (!(every > 1e-3) || !Number.isFinite(every) || doses < 2 || doses > mostDoses) return undefined
+  const each = quantity<Mass>(solver.fullDose)
+  const phases: Phase[] = []
+  for (let i = 0; i < doses; i++)
+    phases.push(
+      { phase: 'dose', amount: each },
+      { phase: 'hold', for: i < doses - 1 ? every : quantity<Time>(100 * every) },
+    )
+  const staged = solverOf({
+    ...scenario,
+    programme: {
+      kind: 'phases',
+      start: { temperature: programme.temperature, ...(programme.pH !== undefined && { pH: programme.pH }) },
+      phases,
+      countDoseVolume: programme.countDoseVolume,
+    },
+  })
+  return { kind: 'staged', doses, each, every, time: quantity<Time>(timeTo(staged, conversion)) }
+}
+
+/** With the first dose before everything else. */
+function dosedFirst(scenario: Scenario): Scenario {
+  const { programme } = scenario
+  if (programme.kind === 'constant') return scenario
+  const first = programme.phases.findIndex((phase) => phase.phase === 'dose')
+  if (first < 0) return scenario
+  const dose = programme.phases[first] as Phase
+  const phases = [dose, ...programme.phases.filter((_, i) => i !== first)]
+  return { ...scenario, programme: { ...programme, phases } }
+}
