@@ -17,7 +17,9 @@ const complaint = (path: string, specifier: string): string[] => {
       ? []
       : [`${path} (${from}) imports ${target} (${to ?? 'no room'})`]
   }
-  const allowed = (room.packages ?? []).some((name) => target === name || (name.endsWith(':') && target.startsWith(name)))
+  const allowed = (room.packages ?? []).some(
+    (name) => target === name || (name.endsWith(':') && target.startsWith(name)),
+  )
   return allowed ? [] : [`${path} (${from}) imports ${target}`]
 }
 

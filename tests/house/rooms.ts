@@ -9,11 +9,11 @@ export interface Room {
 const algebra = ['outcome', 'numeric']
 const chemistry = ['outcome', 'units', 'scenario']
 const solving = ['outcome', 'units', 'numeric', 'kinetics', 'integrate', 'scenario', 'answer']
-const door = ['engine', 'scenario', 'answer']
+const door = ['engine', 'outcome', 'scenario', 'answer']
 
 /**
- * `engine` is the engine's door. `scenario` and `answer` are the types that cross it: plain data described in
- * SI. A room may always import itself.
+ * `engine` is the engine's door. `outcome`, `scenario` and `answer` hold the words in which everyone speaks to
+ * it: plain data described in SI. A room may always import itself.
  */
 export const rooms: Readonly<Record<string, Room>> = {
   outcome: { rooms: [] },
@@ -30,7 +30,7 @@ export const rooms: Readonly<Record<string, Room>> = {
   plan: { rooms: ['outcome', 'units', 'solve', 'cost', 'schedule', 'scenario', 'answer'] },
   engine: { rooms: [...solving, 'solve', 'fit', 'plan', 'cost', 'schedule'] },
   contract: { rooms: door, packages: ['zod'] },
-  command: { rooms: [...door, 'contract'], packages: ['node:'] },
+  command: { rooms: [...door, 'contract'], packages: ['node:', 'dist/node/dosewright.js'] },
 }
 
 const doors: Readonly<Record<string, string>> = {
