@@ -10,7 +10,7 @@ import { createStiffnessWatch } from './stiffness.ts'
 /** A step that leaves the domain of the rate is cut to this part of itself… */
 const RETREAT = 0.1
 /** …and this many cuts without getting past the place name the rate as not finite. */
-const MOST_RETREATS = 12
+const MOST_RETREATS = 40
 
 /** A step that would stop this little of itself short of the end goes to the end. */
 const STRETCH = 1 + 1e-10

@@ -2,7 +2,7 @@
  * Coefficients of the Rosenbrock method RODAS, in the variables that avoid products with the
  * Jacobian: (I/(γh) − J)·Uᵢ = f(t + αᵢh, y + Σ aᵢⱼUⱼ) + Σ cᵢⱼUⱼ/h + dᵢh·∂f/∂t.
  *
- * Shapes   six stages; row i of a, c and dense holds its entries for j < i. The last two stages
+ * Shapes   six stages; row i of a and c holds its entries for j < i. The last two stages
  *          and the result continue each other: y + Σ a₅ⱼUⱼ, then + U₅, then + U₆, and U₆ is the
  *          estimated error (fourth order with third embedded, both stiffly accurate).
  * Source   Hairer & Wanner, Solving Ordinary Differential Equations II, IV.7 and their code RODAS.
@@ -26,9 +26,5 @@ export const rodas = {
     [-0.1073529058151375, -9.594562251023355, -20.47028614809616],
     [7.496443313967647, -10.24680431464352, -33.99990352819905, 11.7089089320616],
     [8.083246795921522, -7.981132988064893, -31.52159432874371, 16.31930543123136, -6.058818238834054],
-  ],
-  dense: [
-    [10.12623508344586, -7.487995877610167, -34.80091861555747, -7.992771707568823, 1.025137723295662],
-    [-0.6762803392801253, 6.087714651680015, 16.43084320892478, 24.76722511418386, -6.594389125716872],
   ],
 } as const
