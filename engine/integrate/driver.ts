@@ -88,7 +88,8 @@ export const createDriver = (size: number): Drive => {
       // The component that stops being finite where the step was to lead.
       for (let i = 0; i < size; i++) scratch[i] = (y[i] as number) + h * (f[i] as number)
       rate(trialRate, scratch, t + h)
-      const component = Math.max(firstNotFinite(trialRate), firstNotFinite(method.next), 0)
+      const ahead = firstNotFinite(trialRate)
+      const component = ahead >= 0 ? ahead : Math.max(firstNotFinite(method.next), 0)
       return failed({ kind: 'rate-not-finite', time: t + h, component, reached: reached() } as const)
     }
 

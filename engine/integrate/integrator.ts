@@ -14,7 +14,8 @@ export interface Integrator {
 /**
  * Makes an integrator for problems of `size` components.
  *
- * Shapes   every run is independent of the ones before; steps allocate nothing.
+ * Shapes   every run is independent of the ones before; steps allocate nothing. One run at a
+ *          time: a rate or an event must not run its own integrator again.
  * Fails    runs fail as `IntegrationFailure` says, with the last accepted point inside; a problem
  *          or control that makes no sense (a bug of the caller) throws a RangeError.
  */
