@@ -10,6 +10,10 @@ const ERROR_PER_CHANGE = 1 / 400
 /** How far the trial step that measures the curvature moves any component, of its magnitude. */
 const PROBE = 0.01
 
+/** Longest time scale believed, in times to move by the magnitude of a component: curvatures may
+ * cancel by chance. */
+const LONGEST = 2
+
 /**
  * A first step of about the right length, at the price of one rate evaluation.
  *
@@ -19,10 +23,6 @@ const PROBE = 0.01
  *          Wanner, Solving Ordinary Differential Equations I, II.4; but the time scale is
  *          |y′|/|y″|, where they take the unit of time for it and start far too short.
  */
-/** Longest time scale believed, in times to move by the magnitude of a component: curvatures may
- * cancel by chance. */
-const LONGEST = 2
-
 export const firstStep = (
   rate: RateInto,
   t: number,
