@@ -10,8 +10,8 @@ export interface PlacedFault {
 /** The most faults listed one by one. */
 export const mostFaults = 50
 
-/** Sorted by place, without repeats, the surplus counted in a last line. */
-export const listFaults = (text: string, faults: readonly PlacedFault[]): readonly Fault[] => {
+/** Sorted by place, without repeats; those beyond the limit, and those already left out, counted in a last line. */
+export const listFaults = (text: string, faults: readonly PlacedFault[], unlisted = 0): readonly Fault[] => {
   if (faults.length === 0) return []
   const offsets = offsetsOf(
     text,
@@ -26,9 +26,7 @@ export const listFaults = (text: string, faults: readonly PlacedFault[]): readon
     lines.set(`${path}: ${fault.message}`, { path, message: fault.message })
   }
   const all = [...lines.values()]
-  if (all.length <= mostFaults) return all
-  return [
-    ...all.slice(0, mostFaults),
-    { path: wholeFile, message: `and ${all.length - mostFaults} more faults` },
-  ]
+  const listed = all.slice(0, mostFaults)
+  const more = all.length - listed.length + unlisted
+  return more === 0 ? listed : [...listed, { path: wholeFile, message: `and ${more} more` }]
 }

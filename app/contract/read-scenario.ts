@@ -11,7 +11,9 @@ import { type BadInput, type Fault, wholeFile } from './fault.ts'
 import { lineAndColumn } from './json/places.ts'
 import { walkJson } from './json/walk.ts'
 import { listFaults, type PlacedFault } from './list-faults.ts'
+import { part } from './rules/view.ts'
 import { toScenario } from './to-scenario.ts'
+import { mostKeys } from './words/key-words.ts'
 
 export interface ReadScenario {
   readonly scenario: Scenario
@@ -48,7 +50,7 @@ export const readScenario = (text: string): Outcome<ReadScenario, BadInput> => {
   if (text.trim() === '') return bad([whole('is empty; a scenario is a JSON object')])
   const walked = walkJson(text)
   const repeated = walked.repeated.map(
-    (path): PlacedFault => ({ path, message: 'the key is given more than once' }),
+    (path): PlacedFault => ({ path, message: 'the key is given more than once; keep one of them' }),
   )
   if (walked.fault !== undefined) {
     const { at, message } = walked.fault
@@ -59,35 +61,40 @@ export const readScenario = (text: string): Outcome<ReadScenario, BadInput> => {
   if (crowd !== undefined) return bad(listFaults(text, [...repeated, crowd]))
   const read = scenarioFile.safeParse(source)
   if (read.success && repeated.length === 0) return success({ scenario: toScenario(read.data), source })
-  const faults = (read.error?.issues ?? []).flatMap(placed)
-  return bad(listFaults(text, [...repeated, ...faults]))
+  const issues: readonly Issue[] = read.error?.issues ?? []
+  const unlisted = issues.reduce((sum, issue) => sum + Math.max(0, (issue.keys?.length ?? 0) - mostKeys), 0)
+  return bad(listFaults(text, [...repeated, ...issues.flatMap(placed)], unlisted))
 }
 
-/** A list of phases too long to be a batch's; said before each of them is looked at. */
-const crowded = (source: unknown): PlacedFault | undefined => {
-  const phases = (source as { programme?: { phases?: unknown } } | null)?.programme?.phases
-  return Array.isArray(phases) && phases.length > mostPhases
-    ? {
-        path: ['programme', 'phases'],
-        message: `found ${phases.length} phases; a programme has at most ${mostPhases}`,
-      }
-    : undefined
-}
+/** A list too long to be a batch's; said before each of its entries is looked at. */
+const crowded = (source: unknown): PlacedFault | undefined =>
+  [
+    ['programme', 'phases'],
+    ['enzyme', 'inactivation', 'series'],
+  ]
+    .map((path) => ({ path, list: part(source, ...path) }))
+    .flatMap(({ path, list }) =>
+      Array.isArray(list) && list.length > mostPhases
+        ? [{ path, message: `found a list of ${list.length}; at most ${mostPhases} entries are read` }]
+        : [],
+    )[0]
 
-/** Unknown keys come as one issue on what holds them; each is named by its own path. */
-const placed = (issue: {
+interface Issue {
   readonly code: string
   readonly path: readonly PropertyKey[]
   readonly message: string
+  /** Of unknown keys, which come as one issue on what holds them; messages are one a line. */
   readonly keys?: readonly string[]
-}): readonly PlacedFault[] => {
+}
+
+/** Each unknown key is named by its own path. */
+const placed = (issue: Issue): readonly PlacedFault[] => {
   const path = issue.path.map((step) => (typeof step === 'symbol' ? String(step) : step))
   if (issue.keys === undefined) return [{ path, message: issue.message }]
   const messages = issue.message.split('\n')
-  return issue.keys.map((key, n) => ({
-    path: [...path, key],
-    message: messages[n] ?? 'the key is not known here',
-  }))
+  return issue.keys
+    .slice(0, mostKeys)
+    .map((key, n) => ({ path: [...path, key], message: messages[n] ?? 'the key is not known here' }))
 }
 
 const whole = (message: string): Fault => ({ path: wholeFile, message })

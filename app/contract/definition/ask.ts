@@ -1,12 +1,13 @@
 /** What the file asks. */
 import * as z from 'zod'
-import { parseQuantity, type Time } from '../../../engine/index.ts'
+import { formatQuantity, nearest, parseQuantity, type Temperature, type Time } from '../../../engine/index.ts'
 import { found } from '../fault.ts'
-import { quantitySentence } from '../words/quantity-words.ts'
+import { part } from '../rules/view.ts'
+import { quantitySentence, suggestion } from '../words/quantity-words.ts'
 import { complain, onList } from './clashes.ts'
 import { conversionField, quantityField, quantityPattern, rangeSentence, record } from './fields.ts'
 
-const within = quantityField('time', 'above', { title: 'reaction time from the first dose' })
+const within = quantityField('time', 'above', { title: 'the reaction time from the first dose' })
 
 const between = z
   .tuple(
@@ -23,12 +24,15 @@ const between = z
     if (typeof low === 'number' && typeof high === 'number' && !(low < high)) {
       complain(
         ctx,
-        'the first temperature is not below the second; between goes from the lower to the higher',
+        `found ${degrees(low)} before ${degrees(high)}; between goes from the lower to the higher`,
       )
     }
   }, onList)
 
+const degrees = (t: Temperature): string => formatQuantity(t, 'temperature', 'degC', 6)
+
 const longestTrace = 1_000_000
+const mostTimesNamed = 20
 const due = { called: 'a time', units: ['h', 'min', 's', 'd'], example: '1 h' }
 
 /** Times of a trace, read in one loop: a million of them must neither be slow nor each raise its own fault. */
@@ -40,7 +44,7 @@ const traceTimes = z
     description: 'times from the start of the programme',
     minItems: 1,
     maxItems: longestTrace,
-    items: { type: 'string', pattern: quantityPattern(['time']), examples: ['1 h'] },
+    items: { type: 'string', pattern: quantityPattern(['time'], 'at-least'), examples: ['1 h'] },
   })
   .transform((list, ctx): readonly Time[] => {
     const refuse = (message: string, ...path: number[]) =>
@@ -52,19 +56,25 @@ const traceTimes = z
     }
     const times: Time[] = []
     for (const [place, text] of list.entries()) {
-      const read = typeof text === 'string' ? parseQuantity(text, 'time') : undefined
-      if (read?.ok && read.value >= 0) times.push(read.value)
-      else if (typeof text !== 'string' || read === undefined) {
-        refuse(
-          `found ${found(text)}; write a time as a text with its unit, such as "1 h" (units that fit: h, min, s, d)`,
-          place,
-        )
-      } else if (read.ok) refuse(rangeSentence(text, 'at-least', 'a time of the trace'), place)
-      else refuse(quantitySentence(text, read.failure, due), place)
-      if (ctx.issues.length > 100) break
+      const time = traceTime(text)
+      if (typeof time === 'number') times.push(time)
+      else if (place - times.length < mostTimesNamed) refuse(time, place)
     }
+    const wrong = list.length - times.length
+    if (wrong > mostTimesNamed)
+      refuse(`${wrong} of ${list.length} entries are not times; the first are named`)
     return times
   })
+
+/** A time of a trace, or what is wrong with it. */
+const traceTime = (text: unknown): Time | string => {
+  if (typeof text !== 'string') {
+    return `found ${found(text)}; write a time as a text with its unit, such as "1 h" (units that fit: ${due.units.join(', ')})`
+  }
+  const read = parseQuantity(text, 'time')
+  if (!read.ok) return quantitySentence(text, read.failure, due)
+  return read.value >= 0 ? read.value : rangeSentence(text, 'at-least', 'a time of the trace')
+}
 
 const find = <F extends string>(word: F) => z.literal(word)
 
@@ -111,19 +121,19 @@ export const ask = z.discriminatedUnion(
 const later = ['cheapest', 'probability']
 
 const wordFault = (
-  issue: { readonly code?: string; readonly input?: unknown },
+  issue: { readonly code?: string; readonly input?: unknown; readonly options?: readonly unknown[] },
   key: string,
   answers: string,
 ): string => {
   if (issue.code !== 'invalid_union') {
-    return issue.input === undefined
-      ? 'is missing; it is an object that says what to find'
-      : `found ${found(issue.input)}; ask is an object that says what to find`
+    const due = 'ask must be an object that says what to find'
+    return issue.input === undefined ? `is missing; ${due}` : `found ${found(issue.input)}; ${due}`
   }
-  const word = (issue.input as Readonly<Record<string, unknown>> | undefined)?.[key]
+  const word = part(issue.input, key)
   if (word === undefined) return `is missing; ${answers}`
-  const known = typeof word === 'string' && later.includes(word)
-  return known
+  if (typeof word !== 'string') return `found ${found(word)}; ${answers}`
+  const words = (issue.options ?? []).filter((option) => typeof option === 'string')
+  return later.includes(word)
     ? `found ${found(word)}, which this version does not answer; ${answers}`
-    : `found ${found(word)}; ${answers}`
+    : `found ${found(word)}${suggestion(nearest(word, words))}; ${answers}`
 }

@@ -20,7 +20,7 @@ export const given = (value: unknown, keys: readonly string[]): readonly string[
 export const exactlyOne = (ctx: z.core.$RefinementCtx, value: unknown, keys: readonly string[]): void => {
   const present = given(value, keys)
   if (present.length === 1) return
-  const found = present.length === 0 ? 'none of them' : listed(present, 'and')
+  const found = present.length > 0 ? listed(present, 'and') : keys.length === 2 ? 'neither' : 'none of them'
   complain(ctx, `exactly one of ${listed(keys, 'and')} is due; found ${found}`)
 }
 

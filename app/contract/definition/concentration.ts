@@ -12,7 +12,7 @@ export const concentrationField = (title: string, range: Range, example = '45 g/
   eitherField(
     ['concentration', 'molar concentration'],
     range,
-    { title, example },
+    { title, example, called: 'a concentration' },
     (dimension, value): GivenConcentration =>
       dimension === 'concentration'
         ? { by: 'mass', value: quantity<Concentration>(value) }

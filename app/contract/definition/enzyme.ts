@@ -14,7 +14,7 @@ import { inactivation } from './inactivation.ts'
 /** Temperature and, where something follows it, pH. */
 export const conditions = (title: string) =>
   record(title, {
-    temperature: quantityField('temperature', 'above', { title: 'temperature' }),
+    temperature: quantityField('temperature', 'above', { title: 'the temperature' }),
     pH: phField().exactOptional(),
   })
 
@@ -22,7 +22,7 @@ const activity = record('a declared activity and how it was measured', {
   declared: eitherField(
     ['activity per mass', 'activity per volume'],
     'above',
-    { title: 'declared activity' },
+    { title: 'the declared activity', called: 'an activity of the preparation' },
     (dimension, value): DeclaredActivity =>
       dimension === 'activity per mass'
         ? { per: 'mass', value: quantity<Activity>(value) }
@@ -30,12 +30,12 @@ const activity = record('a declared activity and how it was measured', {
   ),
   assay: record("the assay's conditions", {
     temperature: quantityField('temperature', 'above', {
-      title: 'temperature of the assay',
+      title: 'the temperature of the assay',
       example: '37 degC',
     }),
-    pH: phField('pH of the assay').exactOptional(),
+    pH: phField('the pH of the assay').exactOptional(),
     substrate: concentrationField(
-      'substrate in the assay; absent: it saturates the enzyme',
+      'the substrate in the assay (absent: it saturates the enzyme)',
       'above',
       '50 g/L',
     ).exactOptional(),
@@ -44,7 +44,7 @@ const activity = record('a declared activity and how it was measured', {
 
 const rate = record('the rate law and its constants', {
   specificRate: quantityField('specific rate', 'above', {
-    title: 'mass of substrate per mass of preparation and time, saturated and uninhibited, at the reference',
+    title: 'the specific rate (saturated and uninhibited, at the reference)',
   }).exactOptional(),
   activity: activity.exactOptional(),
   reference: conditions('where the specific rate holds').exactOptional(),
@@ -84,11 +84,11 @@ const temperature = record('how the rate follows the temperature', {
   }).exactOptional(),
   reversibleLoss: record('loss of activity in the heat that cooling restores', {
     half: quantityField('temperature', 'above', {
-      title: 'where half of the enzyme is out of action',
+      title: 'the temperature at which half of the enzyme is out of action',
       example: '55 degC',
     }),
     energy: quantityField('molar energy', 'at-least', {
-      title: 'energy of the reversible loss',
+      title: 'the energy of the reversible loss',
       example: '300 kJ/mol',
     }),
   }).exactOptional(),
@@ -146,7 +146,7 @@ export const enzyme = record('the enzyme preparation', {
   name: textField('name of the preparation').exactOptional(),
   form: textField('liquid, powder …').exactOptional(),
   density: quantityField('density', 'above', {
-    title: 'density of the preparation; needed for activities per volume and countDoseVolume',
+    title: 'the density of the preparation (needed for activities per volume and countDoseVolume)',
   }).exactOptional(),
   rate,
   temperature,

@@ -12,23 +12,23 @@ const slow = record('the share of the substrate that reacts slowly', {
 const substrate = record('the substrate', {
   name: textField('name of the substrate').exactOptional(),
   molarMass: quantityField('molar mass', 'above', {
-    title: 'molar mass of the substrate; needed for activities and molar concentrations',
+    title: 'the molar mass of the substrate (needed for activities and molar concentrations)',
   }).exactOptional(),
-  concentration: concentrationField('concentration of substrate charged', 'above'),
+  concentration: concentrationField('the concentration of substrate charged', 'above'),
   slow: slow.exactOptional(),
 })
 
 const product = record('the product that inhibits', {
   name: textField('name of the product').exactOptional(),
-  massYield: numberField('mass of product per mass of substrate', { above: 0 }).exactOptional(),
+  massYield: numberField('the mass of product per mass of substrate', { above: 0 }).exactOptional(),
   molarMass: quantityField('molar mass', 'above', {
-    title: 'molar mass of the product; instead of massYield',
+    title: 'the molar mass of the product (instead of massYield)',
     example: '180.16 g/mol',
   }).exactOptional(),
-  molesPerSubstrate: numberField('moles of product per mole of substrate; 1 if absent', {
+  molesPerSubstrate: numberField('the moles of product per mole of substrate (1 if absent)', {
     above: 0,
   }).exactOptional(),
-  concentration: concentrationField('concentration of product charged', 'at-least', '0 g/L'),
+  concentration: concentrationField('the concentration of product charged', 'at-least', '0 g/L'),
 })
   .superRefine((value, ctx) => {
     const stoichiometry = given(value, ['molarMass', 'molesPerSubstrate'])
@@ -62,7 +62,7 @@ const product = record('the product that inhibits', {
 
 /** `feed` of the file. */
 export const feed = record('what is charged before the enzyme', {
-  volume: quantityField('volume', 'above', { title: 'volume charged' }),
+  volume: quantityField('volume', 'above', { title: 'the volume charged' }),
   substrate,
   product,
 })

@@ -17,7 +17,7 @@ import {
   quantity,
 } from '../../../engine/index.ts'
 import { found } from '../fault.ts'
-import { unknownKeySentence } from '../words/key-words.ts'
+import { unknownKeySentences } from '../words/key-words.ts'
 import { type Due, quantitySentence } from '../words/quantity-words.ts'
 
 /** What values of a quantity are allowed, in SI; for a temperature `above` means above absolute zero. */
@@ -26,6 +26,8 @@ export type Range = 'above' | 'at-least'
 interface Described {
   readonly title: string
   readonly example?: string
+  /** What is due, with its article, where the dimension's own name says too little. */
+  readonly called?: string
 }
 
 /** A quantity of one dimension. */
@@ -41,11 +43,11 @@ export const eitherField = <D extends DimensionName, T>(
 ) => {
   const first = due[0]
   const words: Due = {
-    called: dimensions[first].called,
+    called: about.called ?? dimensions[first].called,
     units: due.flatMap(fittingUnits),
     example: about.example ?? dimensions[first].example,
   }
-  return describedText(words, about.title, quantityPattern(due)).transform((text, ctx) => {
+  return describedText(words, about.title, quantityPattern(due, range)).transform((text, ctx) => {
     const read = parseOneOf(text, due)
     const message = !read.ok
       ? quantitySentence(text, read.failure, words)
@@ -65,7 +67,7 @@ export const moneyField = (per: MoneyPer, about: Described & { readonly example:
     units: fittingPer(per).map((symbol) => `EUR/${symbol}`),
     example: about.example,
   }
-  const pattern = `^[+-]?${numberPattern} *[A-Z]{3}/(?:${alternatives(perSymbols(per))})$`
+  const pattern = `^${numberIn['at-least']} *[A-Z]{3}/(?:${alternatives(perSymbols(per))})$`
   return describedText(words, about.title, pattern).transform((text, ctx): Money => {
     const read = parseMoney(text, per)
     if (read.ok && read.value.value >= 0) return read.value
@@ -77,27 +79,18 @@ export const moneyField = (per: MoneyPer, about: Described & { readonly example:
   })
 }
 
+interface Bounds {
+  readonly above?: number
+  readonly atLeast?: number
+  readonly below?: number
+  readonly atMost?: number
+}
+
 /** A plain number within bounds; `above` and `below` exclude their bound. */
-export const numberField = (
-  title: string,
-  bounds: {
-    readonly above?: number
-    readonly atLeast?: number
-    readonly below?: number
-    readonly atMost?: number
-  } = {},
-) => {
-  const limits = [
-    bounds.above === undefined ? '' : `above ${bounds.above}`,
-    bounds.atLeast === undefined ? '' : `at least ${bounds.atLeast}`,
-    bounds.below === undefined ? '' : `below ${bounds.below}`,
-    bounds.atMost === undefined ? '' : `at most ${bounds.atMost}`,
-  ].filter((limit) => limit !== '')
-  const due = `a plain number${limits.length === 0 ? '' : ` ${limits.join(' and ')}`}`
+export const numberField = (title: string, bounds: Bounds = {}) => {
+  const due = `must be a plain number${boundsText(bounds)}`
   const error = (issue: { readonly input?: unknown }): string =>
-    issue.input === undefined
-      ? `is missing; ${title} is ${due}`
-      : `found ${found(issue.input)}; ${title} is ${due}`
+    issue.input === undefined ? `is missing; ${title} ${due}` : `found ${found(issue.input)}; ${title} ${due}`
   let field = z.number({ error })
   if (bounds.above !== undefined) field = field.gt(bounds.above, { error })
   if (bounds.atLeast !== undefined) field = field.gte(bounds.atLeast, { error })
@@ -107,15 +100,15 @@ export const numberField = (
 }
 
 /** pH, 0 to 14. */
-export const phField = (title = 'pH') => numberField(title, { atLeast: 0, atMost: 14 })
+export const phField = (title = 'the pH') => numberField(title, { atLeast: 0, atMost: 14 })
 
 /** Conversion, between 0 and 1. */
-export const conversionField = () => numberField('conversion', { above: 0, below: 1 })
+export const conversionField = () => numberField('the conversion', { above: 0, below: 1 })
 
 /** Free text for people. */
 export const textField = (title: string) =>
   z
-    .string({ error: (issue) => `found ${found(issue.input)}; ${title} is a text` })
+    .string({ error: (issue) => `found ${found(issue.input)}; ${title} must be a text` })
     .meta({ description: title })
 
 /** true or false. */
@@ -131,11 +124,11 @@ export const record = <S extends z.core.$ZodLooseShape>(title: string, shape: S)
     .strictObject(shape, {
       error: (issue) => {
         if (issue.code === 'unrecognized_keys') {
-          return issue.keys.map((key) => unknownKeySentence(key, known)).join('\n')
+          return unknownKeySentences(issue.keys, known)
         }
         return issue.input === undefined
           ? `is missing; it is an object with ${known.join(', ')}`
-          : `found ${found(issue.input)}; ${title} is an object with ${known.join(', ')}`
+          : `found ${found(issue.input)}; ${title} must be an object with ${known.join(', ')}`
       },
     })
     .meta({ description: title })
@@ -147,19 +140,37 @@ export const rangeSentence = (text: string, range: Range, title: string, of?: Di
   return `found ${found(text)}; ${title} must be ${range === 'above' ? 'above' : 'at least'} ${least}`
 }
 
+const boundsText = (bounds: Bounds): string => {
+  if (bounds.atLeast !== undefined && bounds.atMost !== undefined) {
+    return ` from ${bounds.atLeast} to ${bounds.atMost}`
+  }
+  const limits = [
+    ...(bounds.above === undefined ? [] : [`above ${bounds.above}`]),
+    ...(bounds.atLeast === undefined ? [] : [`of at least ${bounds.atLeast}`]),
+    ...(bounds.below === undefined ? [] : [`below ${bounds.below}`]),
+    ...(bounds.atMost === undefined ? [] : [`at most ${bounds.atMost}`]),
+  ]
+  return limits.length === 0 ? '' : ` ${limits.join(' and ')}`
+}
+
 const outOfRange = (value: number, range: Range): boolean =>
   range === 'above' ? !(value > 0) : !(value >= 0)
 
-const numberPattern = '(?:0|[1-9][0-9]*)(?:\\.[0-9]+)?(?:[eE][+-]?[0-9]+)?'
+/** The texts a quantity may be, as a regular expression for the JSON Schema. */
+export const quantityPattern = (due: readonly DimensionName[], range: Range): string => {
+  const symbols = due.flatMap((dimension) => dimensions[dimension].units.map((u) => u.symbol))
+  return `^${due[0] === 'temperature' ? `[+-]?${number}` : numberIn[range]} *(?:${alternatives(symbols)})$`
+}
+
+const number = '(?:0|[1-9][0-9]*)(?:\\.[0-9]+)?(?:[eE][+-]?[0-9]+)?'
+const zero = '0(?:\\.0+)?(?:[eE][+-]?[0-9]+)?'
+
+const numberIn: Readonly<Record<Range, string>> = {
+  above: `\\+?(?!${zero}[^.0-9eE])${number}`,
+  'at-least': `(?:\\+?${number}|-${zero})`,
+}
 
 const alternatives = (symbols: readonly string[]): string => [...new Set(symbols)].join('|')
-
-/** The texts a quantity may be, as a regular expression for the JSON Schema. */
-export const quantityPattern = (due: readonly DimensionName[]): string => {
-  const sign = due[0] === 'temperature' ? '[+-]?' : '\\+?'
-  const symbols = due.flatMap((dimension) => dimensions[dimension].units.map((u) => u.symbol))
-  return `^${sign}${numberPattern} *(?:${alternatives(symbols)})$`
-}
 
 const describedText = (words: Due, title: string, pattern: string) =>
   z

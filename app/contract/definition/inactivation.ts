@@ -9,12 +9,18 @@ const stepKeys = ['kd', 'halfLife', 'D', 'at', 'Ea', 'z'] as const
 
 const stepFields = {
   kd: quantityField('first-order rate', 'at-least', { title: 'kd, rate of inactivation' }).exactOptional(),
-  halfLife: quantityField('time', 'above', { title: 'half-life, ln 2/kd', example: '8.7 h' }).exactOptional(),
+  halfLife: quantityField('time', 'above', {
+    title: 'the half-life, ln 2/kd,',
+    example: '8.7 h',
+  }).exactOptional(),
   D: quantityField('time', 'above', {
-    title: 'D, time for a tenth to remain',
+    title: 'D, the time for a tenth to remain,',
     example: '28.8 h',
   }).exactOptional(),
-  at: quantityField('temperature', 'above', { title: 'temperature at which kd holds', example: '40 degC' }),
+  at: quantityField('temperature', 'above', {
+    title: 'the temperature at which kd holds',
+    example: '40 degC',
+  }),
   Ea: quantityField('molar energy', 'at-least', {
     title: 'Ea, activation energy of the inactivation',
     example: '230 kJ/mol',
@@ -41,7 +47,7 @@ const stepRules = (value: unknown, ctx: z.core.$RefinementCtx): void => {
 
 const seriesStep = record('one step of inactivation', {
   ...stepFields,
-  residual: numberField('activity of the form after this step beside the native one', { atLeast: 0 }),
+  residual: numberField('the activity of the form after this step beside the native one', { atLeast: 0 }),
 })
   .superRefine(stepRules, onObject)
   .meta({ allOf: [{ oneOf: oneOfRates }, { oneOf: oneOfSlopes }] })
@@ -69,7 +75,7 @@ export const inactivation = record('how the enzyme is lost', {
   pH: record('how the loss follows the pH', {
     pKa1: numberField('pKa1, below which acid speeds the loss'),
     pKa2: numberField('pKa2, above which alkali speeds the loss'),
-    at: phField('pH at which kd holds'),
+    at: phField('the pH at which kd holds'),
   }).exactOptional(),
 })
   .superRefine((value, ctx) => {

@@ -4,10 +4,10 @@ import { moneyField, numberField, quantityField, record } from './fields.ts'
 
 /** `costs` of the file. */
 export const costs = record('what a batch costs', {
-  enzyme: moneyField('mass', { title: 'price of the preparation', example: '30 EUR/kg' }).exactOptional(),
-  vessel: moneyField('time', { title: 'cost of the vessel', example: '85 EUR/h' }).exactOptional(),
+  enzyme: moneyField('mass', { title: 'the price of the preparation', example: '30 EUR/kg' }).exactOptional(),
+  vessel: moneyField('time', { title: 'the cost of the vessel', example: '85 EUR/h' }).exactOptional(),
   turnaround: quantityField('time', 'at-least', {
-    title: 'vessel time per batch beside the reaction',
+    title: 'the vessel time per batch beside the reaction',
     example: '90 min',
   }).exactOptional(),
 }).superRefine((value, ctx) => {
@@ -23,7 +23,7 @@ export const costs = record('what a batch costs', {
 }, onObject)
 
 const relative = (what: string) =>
-  numberField(`relative standard deviation of ${what}`, { atLeast: 0 }).exactOptional()
+  numberField(`the relative standard deviation of ${what}`, { atLeast: 0 }).exactOptional()
 
 /** `spreads` of the file. */
 export const spreads = record('how much things scatter', {
@@ -38,8 +38,8 @@ export const spreads = record('how much things scatter', {
   dose: relative('the dose'),
   concentration: relative('the concentration charged'),
   temperature: quantityField('temperature difference', 'at-least', {
-    title: 'standard deviation of the temperature',
+    title: 'the standard deviation of the temperature',
     example: '0.4 K',
   }).exactOptional(),
-  pH: numberField('standard deviation of the pH', { atLeast: 0 }).exactOptional(),
+  pH: numberField('the standard deviation of the pH', { atLeast: 0 }).exactOptional(),
 })

@@ -1,23 +1,28 @@
 /** The phases of a programme. */
 import * as z from 'zod'
-import { type FeedFlow, type Flow, type MassFlow, quantity } from '../../../engine/index.ts'
+import { type FeedFlow, type Flow, type MassFlow, nearest, quantity } from '../../../engine/index.ts'
 import { found } from '../fault.ts'
+import { part } from '../rules/view.ts'
+import { suggestion } from '../words/quantity-words.ts'
 import { complain, given, onObject } from './clashes.ts'
 import { concentrationField } from './concentration.ts'
 import { conversionField, eitherField, phField, quantityField, record } from './fields.ts'
 
 const jacket = record('the jacket', {
   temperature: quantityField('temperature', 'above', {
-    title: 'temperature of the jacket',
+    title: 'the temperature of the jacket',
     example: '60 degC',
   }),
-  timeConstant: quantityField('time', 'above', { title: 'time constant of the approach', example: '25 min' }),
+  timeConstant: quantityField('time', 'above', {
+    title: 'the time constant of the approach',
+    example: '25 min',
+  }),
 })
 
 const change = {
-  to: quantityField('temperature', 'above', { title: 'set point' }),
+  to: quantityField('temperature', 'above', { title: 'the set point' }),
   ramp: quantityField('ramp', 'above', {
-    title: 'ramp; absent: at once, or as fast as the jacket lets',
+    title: 'the ramp (absent: at once, or as fast as the jacket lets)',
   }).exactOptional(),
   jacket: jacket.exactOptional(),
 }
@@ -27,17 +32,17 @@ const cool = record('cooling', { phase: z.literal('cool'), ...change })
 const inactivate = record('the kill step', {
   phase: z.literal('inactivate'),
   ...change,
-  hold: quantityField('time', 'at-least', { title: 'time at the set point', example: '10 min' }),
+  hold: quantityField('time', 'at-least', { title: 'the time at the set point', example: '10 min' }),
 })
 
 const dose = record('a dose', {
   phase: z.literal('dose'),
-  amount: quantityField('mass', 'above', { title: 'enzyme preparation' }),
+  amount: quantityField('mass', 'above', { title: 'the dose' }),
 })
 
 const hold = record('holding', {
   phase: z.literal('hold'),
-  for: quantityField('time', 'above', { title: 'how long', example: '6 h' }).exactOptional(),
+  for: quantityField('time', 'above', { title: 'the length of the hold', example: '6 h' }).exactOptional(),
   until: record('what ends the hold', { conversion: conversionField() }).exactOptional(),
   atMost: quantityField('time', 'above', {
     title: 'the longest the hold may take',
@@ -77,17 +82,17 @@ const flow = (title: string) =>
 
 const feedPhase = record('feeding', {
   phase: z.literal('feed'),
-  flow: flow('flow of the feed'),
-  flowTo: flow('flow at the end; absent: steady').exactOptional(),
-  for: quantityField('time', 'above', { title: 'how long', example: '2 h' }),
-  concentration: concentrationField('substrate in the feed', 'above', '150 g/L'),
+  flow: flow('the flow of the feed'),
+  flowTo: flow('the flow at the end (absent: steady)').exactOptional(),
+  for: quantityField('time', 'above', { title: 'the length of the feed', example: '2 h' }),
+  concentration: concentrationField('the substrate in the feed', 'above', '150 g/L'),
   enzyme: quantityField('concentration', 'at-least', {
-    title: 'enzyme preparation in the feed',
+    title: 'the enzyme preparation in the feed',
     example: '0.3 g/L',
   }).exactOptional(),
-  product: concentrationField('product in the feed', 'at-least', '0 g/L').exactOptional(),
+  product: concentrationField('the product in the feed', 'at-least', '0 g/L').exactOptional(),
   density: quantityField('density', 'above', {
-    title: 'density of the feed; needed for a flow by mass',
+    title: 'the density of the feed (needed for a flow by mass)',
     example: '1.05 kg/L',
   }).exactOptional(),
 })
@@ -99,10 +104,12 @@ const known = ['heat', 'dose', 'hold', 'feed', 'adjust', 'inactivate', 'cool']
 /** One of `programme.phases`. */
 export const phase = z.discriminatedUnion('phase', [heat, dose, hold, feedPhase, adjust, inactivate, cool], {
   error: (issue) => {
-    if (issue.code !== 'invalid_union') return `found ${found(issue.input)}; a phase is an object`
-    const named = (issue.input as { readonly phase?: unknown } | undefined)?.phase
-    return named === undefined
-      ? `is missing; the phases are ${known.join(', ')}`
-      : `found ${found(named)}; the phases are ${known.join(', ')}`
+    if (issue.code !== 'invalid_union') {
+      return `found ${found(issue.input)}; a phase must be an object, such as { "phase": "dose", "amount": "3.5 kg" }`
+    }
+    const word = part(issue.input, 'phase')
+    const phases = `the phases are ${known.join(', ')}`
+    if (word === undefined) return `is missing; ${phases}`
+    return `found ${found(word)}${typeof word === 'string' ? suggestion(nearest(word, known)) : ''}; ${phases}`
   },
 })

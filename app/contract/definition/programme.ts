@@ -12,11 +12,11 @@ const phaseKeys = ['start', 'phases'] as const
 /** `programme` of the file. */
 export const programme = record('what is done with the batch', {
   temperature: quantityField('temperature', 'above', {
-    title: 'temperature held throughout',
+    title: 'the temperature held throughout',
   }).exactOptional(),
-  pH: phField('pH held throughout').exactOptional(),
-  dose: quantityField('mass', 'above', { title: 'enzyme preparation given at time 0' }).exactOptional(),
-  hold: quantityField('time', 'above', { title: 'how long the batch is held' }).exactOptional(),
+  pH: phField('the pH held throughout').exactOptional(),
+  dose: quantityField('mass', 'above', { title: 'the dose, given at time 0,' }).exactOptional(),
+  hold: quantityField('time', 'above', { title: 'the time the batch is held' }).exactOptional(),
   start: conditions('conditions before the first phase').exactOptional(),
   phases: z
     .array(phase, { error: (issue) => `found ${found(issue.input)}; phases is a list of objects, in order` })

@@ -17,7 +17,10 @@ export const lineAndColumn = (text: string, at: number): string => {
 export const offsetsOf = (text: string, paths: readonly (readonly PathStep[])[]): readonly number[] => {
   const wanted = new Map<string, number>([[wholeFile, 0]])
   for (const path of paths) for (let n = 1; n <= path.length; n++) wanted.set(pathText(path.slice(0, n)), -1)
+  const lastSteps = new Set(paths.flat())
   walkJson(text, (path, at) => {
+    const last = path.at(-1)
+    if (last === undefined || !lastSteps.has(last)) return
     const written = pathText(path)
     if (wanted.get(written) === -1) wanted.set(written, at)
   })

@@ -18,6 +18,7 @@ interface Course {
 /** Walks through the phases in order. */
 export const phasesFollow = (file: unknown, ctx: Ctx): void => {
   if (!Array.isArray(part(file, 'programme', 'phases'))) return
+  if (shortKeys.some((key) => part(file, 'programme', key) !== undefined)) return
   const phases = phasesOf(file)
   if (phases.length === 0) {
     complain(ctx, 'found an empty list; at least a dose is due', 'programme', 'phases')
@@ -32,6 +33,9 @@ export const phasesFollow = (file: unknown, ctx: Ctx): void => {
     complain(ctx, 'no phase gives a dose; at least one { "phase": "dose" } is due', 'programme', 'phases')
   }
 }
+
+/** Beside these, `programme` itself is at fault. */
+const shortKeys = ['temperature', 'pH', 'dose', 'hold']
 
 const follow = (course: Course, phase: unknown, say: Complain): void => {
   switch (part(phase, 'phase')) {

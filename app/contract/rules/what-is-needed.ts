@@ -1,6 +1,7 @@
 /** Parts that are optional until another part needs them. */
 import type * as z from 'zod'
 import { complain } from '../definition/clashes.ts'
+import { type PathStep, pathText } from '../fault.ts'
 import { fieldsOf, part, phasesOf } from './view.ts'
 
 type Ctx = z.core.$RefinementCtx
@@ -8,38 +9,56 @@ type Ctx = z.core.$RefinementCtx
 /** The substrate's molar mass, for activities, molar concentrations and a stoichiometric yield. */
 export const molarMassWhereNeeded = (file: unknown, ctx: Ctx): void => {
   const substrate = fieldsOf(part(file, 'feed', 'substrate'))
-  if (substrate === undefined || Object.hasOwn(substrate, 'molarMass')) return
-  const user = usersOfMolarMass(file)[0]
-  if (user !== undefined) {
+  if (substrate === undefined) return
+  const { molarMass } = substrate
+  if (molarMass === undefined) {
+    const user = usersOfMolarMass(file)[0]
+    if (user === undefined) return
     complain(ctx, `is missing; ${user} needs it, such as "342.3 g/mol"`, 'feed', 'substrate', 'molarMass')
+  } else if (typeof molarMass === 'number') {
+    for (const { path, value } of molarValues(file)) {
+      const byMass = value * molarMass
+      if (Number.isFinite(byMass) && (byMass > 0 || value === 0)) continue
+      complain(ctx, 'leaves the range of doubles when it is converted through the molar mass', ...path)
+    }
   }
 }
 
 const usersOfMolarMass = (file: unknown): readonly string[] => [
   ...(part(file, 'enzyme', 'rate', 'activity') === undefined ? [] : ['enzyme.rate.activity']),
   ...(part(file, 'feed', 'product', 'molarMass') === undefined ? [] : ['feed.product.molarMass']),
-  ...molarPlaces
-    .filter((path) => isMolar(part(file, ...path)))
-    .map((path) => `${path.join('.')}, a molar concentration,`),
+  ...molarValues(file).map(({ path }) => `${pathText(path)}, a molar concentration,`),
+]
+
+interface MolarValue {
+  readonly path: readonly PathStep[]
+  readonly value: number
+}
+
+const molarValues = (file: unknown): readonly MolarValue[] => [
+  ...molarPlaces.flatMap((path) => molarValue(path, part(file, ...path))),
   ...phasesOf(file).flatMap((phase, n) =>
-    ['concentration', 'product']
-      .filter((key) => isMolar(part(phase, key)))
-      .map((key) => `programme.phases[${n}].${key}, a molar concentration,`),
+    ['concentration', 'product'].flatMap((key) =>
+      molarValue(['programme', 'phases', n, key], part(phase, key)),
+    ),
   ),
 ]
+
+const molarValue = (path: readonly PathStep[], given: unknown): readonly MolarValue[] => {
+  const value = part(given, 'value')
+  return part(given, 'by') === 'amount' && typeof value === 'number' ? [{ path, value }] : []
+}
 
 const molarPlaces = [
   ['feed', 'substrate', 'concentration'],
   ['feed', 'product', 'concentration'],
+  ['enzyme', 'rate', 'activity', 'assay', 'substrate'],
   ['enzyme', 'rate', 'Km'],
   ['enzyme', 'rate', 'Kic'],
   ['enzyme', 'rate', 'Kiu'],
   ['enzyme', 'rate', 'Ksi'],
-  ['enzyme', 'rate', 'activity', 'assay', 'substrate'],
   ['enzyme', 'inactivation', 'Kp'],
 ]
-
-const isMolar = (value: unknown): boolean => part(value, 'by') === 'amount'
 
 /** pH wherever the rate or the loss of enzyme follows it. */
 export const phWhereNeeded = (file: unknown, ctx: Ctx): void => {

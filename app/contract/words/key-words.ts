@@ -2,8 +2,18 @@
 import { nearest } from '../../../engine/index.ts'
 import { visible } from '../fault.ts'
 
+/** The most unknown keys of one object that are named one by one. */
+export const mostKeys = 100
+
+/** Why keys may not stand in an object with these known ones, one line for each key. */
+export const unknownKeySentences = (keys: readonly string[], known: readonly string[]): string =>
+  keys
+    .slice(0, mostKeys)
+    .map((key) => unknownKeySentence(key, known))
+    .join('\n')
+
 /** Why a key may not stand in an object with these known ones. */
-export const unknownKeySentence = (key: string, known: readonly string[]): string => {
+const unknownKeySentence = (key: string, known: readonly string[]): string => {
   const later = known.includes('find') && Object.hasOwn(laterKeys, key) ? laterKeys[key] : undefined
   if (later !== undefined) return later
   const near = nearest(key, known)
