@@ -5,6 +5,10 @@
  */
 import { quantity, type Time } from '../units/quantity.ts'
 
+/** Rate of the degree of hydrolysis, 1/s where a is. */
+export const degreeOfHydrolysisRate = (a: number, b: number, degree: number): number =>
+  a * Math.exp(-b * degree)
+
 /**
  * Degree of hydrolysis after a time.
  *

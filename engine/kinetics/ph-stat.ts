@@ -3,6 +3,7 @@
  *
  * Source   Adler-Nissen 1986, Enzymic Hydrolysis of Food Proteins (pH-stat technique).
  */
+import type { Temperature } from '../units/quantity.ts'
 
 /** Share of freed amino groups that has given off its proton at this pH. */
 export const dissociatedShare = (pH: number, pK: number): number => 1 / (1 + 10 ** (pK - pH))
@@ -26,3 +27,12 @@ export const baseForDegreeOfHydrolysis = (
   protein: number,
   bonds: number,
 ): number => degreeOfHydrolysis * share * protein * bonds
+
+/**
+ * pK of the freed amino groups at T.
+ *
+ * Units    `at25` is the pK at 25 degC, `slope` K.
+ * Source   Adler-Nissen 1986: pK falls with 1/T as van 't Hoff's law has it, at25 + slope·(1/T − 1/298.15).
+ */
+export const pKAt = (at25: number, slope: number, T: Temperature): number =>
+  at25 + (slope * (298.15 - T)) / (298.15 * T)
