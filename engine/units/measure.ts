@@ -22,8 +22,18 @@ export const unit = (symbol: string, times = 1, over = 1, offset = 0): UnitOfMea
 export const per = (
   above: readonly UnitOfMeasure[],
   below: readonly UnitOfMeasure[],
-): readonly UnitOfMeasure[] =>
-  above.flatMap((a) => below.map((b) => unit(`${a.symbol}/${b.symbol}`, a.times * b.over, a.over * b.times)))
+): readonly UnitOfMeasure[] => above.flatMap((a) => below.map((b) => quotient(a, b)))
+
+/** Common factors go before anything is multiplied, so that every product is exact. */
+const quotient = (a: UnitOfMeasure, b: UnitOfMeasure): UnitOfMeasure => {
+  const times = greatestCommonDivisor(a.times, b.times)
+  const over = greatestCommonDivisor(a.over, b.over)
+  return unit(
+    `${a.symbol}/${b.symbol}`,
+    (a.times / times) * (b.over / over),
+    (a.over / over) * (b.times / times),
+  )
+}
 
 /** Value in SI of a number given in a unit. */
 export const toSi = (value: number, u: UnitOfMeasure): number => {
@@ -33,9 +43,13 @@ export const toSi = (value: number, u: UnitOfMeasure): number => {
 
 /** The number to write before a unit for a value in SI. */
 export const fromSi = (value: number, u: UnitOfMeasure): number => {
-  const base = u.offset === 0 ? value : value - u.offset
+  const base = u.offset === 0 ? value : withoutNoise(value - u.offset)
   return u.times === 1 ? base * u.over : u.over === 1 ? base / u.times : (base * u.over) / u.times
 }
+
+/** A double of kelvins is no finer than 6e-14 K; the digits below, which the subtraction bares, say nothing. */
+const withoutNoise = (difference: number): number =>
+  Math.abs(difference) < 1000 ? Math.round(difference * 1e12) / 1e12 : difference
 
 const greatestCommonDivisor = (a: number, b: number): number => {
   let [x, y] = [a, b]

@@ -88,11 +88,8 @@ test('sound files with parts exchanged for anything', () => {
   )
   for (const source of [shortForm(), phased()]) {
     const all = paths(source)
-    const property = fc.property(
-      fc.constantFrom(...all),
-      fc.option(anything),
-      fc.option(anything),
-      (path, one) => isOutcome(readScenario(JSON.stringify(edited(source, [path, one ?? undefined])))),
+    const property = fc.property(fc.constantFrom(...all), fc.option(anything), (path, one) =>
+      isOutcome(readScenario(JSON.stringify(edited(source, [path, one ?? undefined])))),
     )
     fc.assert(property, { numRuns: 2000 })
   }
