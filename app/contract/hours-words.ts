@@ -12,11 +12,13 @@ export const ledgerSentence = (ledger: HoursLedger): string => {
   return `Of ${total}, ${formatQuantity(worst.time, 'time', 'h')} (${share}) go to ${hoursCauseSentence(worst.cause)}, the largest part that a change of plan could avoid.`
 }
 
-/** The ledger as a table whose numbers align on the decimal point. */
+/** The ledger as a table whose numbers align on the decimal point; lines that would read 0 are left out. */
 export const ledgerTable = (ledger: HoursLedger): readonly string[] => {
   const decimals = decimalsFor(ledger.total / 3600)
   const rows = [
-    ...ledger.lines.map((line) => [hoursCauseSentence(line.cause), line.time / 3600] as const),
+    ...ledger.lines
+      .filter((line) => Math.abs(line.time / 3600) >= 0.5 * 10 ** -decimals)
+      .map((line) => [hoursCauseSentence(line.cause), line.time / 3600] as const),
     ['in all', ledger.total / 3600] as const,
   ].map(([words, value]) => [words, withDecimals(value, decimals)] as const)
   const wide = Math.max(...rows.map(([words]) => words.length))
@@ -25,8 +27,8 @@ export const ledgerTable = (ledger: HoursLedger): readonly string[] => {
 }
 
 const decimalsFor = (largest: number): number => {
-  if (!(largest > 0) || largest >= 100) return 0
-  return Math.min(20, Math.max(0, 2 - Math.floor(Math.log10(largest))))
+  if (!(largest > 0) || largest >= 1000) return 0
+  return largest >= 100 ? 1 : Math.min(20, Math.max(2, 2 - Math.floor(Math.log10(largest))))
 }
 
 const withDecimals = (value: number, decimals: number): string => {

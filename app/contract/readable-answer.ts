@@ -4,11 +4,20 @@
  *
  * Shapes   lines joined by line ends, none at the end; no control characters, whatever the file's texts hold.
  */
-import { type Answer, formatNumber, formatQuantity, type Temperature, type Time } from '../../engine/index.ts'
+import { type Answer, type Ask, formatNumber, formatNumberUp, type Time } from '../../engine/index.ts'
 import { visible } from './fault.ts'
 import { ledgerSentence, ledgerTable } from './hours-words.ts'
 import type { ReadScenario } from './read-scenario.ts'
-import { cautions, checkMethodSentence, percent, remedySentence, warningSentence } from './sentences.ts'
+import {
+  cautions,
+  checkMethodSentence,
+  degrees,
+  hours,
+  kilograms,
+  percent,
+  remedySentence,
+  warningSentence,
+} from './sentences.ts'
 import { traceTable } from './trace-table.ts'
 
 /** What `plan` prints for people; `read` is what readScenario gave. */
@@ -16,7 +25,7 @@ export const readableAnswer = (answer: Answer, read: ReadScenario): string => {
   const title = read.scenario.title
   const parts: (readonly string[])[] = [
     title === undefined ? [] : [visible(title, 200)],
-    [answerSentence(answer), ...limitSentences(answer), ...costSentence(answer)],
+    [answerSentence(answer, read), ...limitSentences(answer, read)],
     answer.trace === undefined ? [] : traceTable(answer.trace),
     answer.hours === undefined
       ? []
@@ -35,73 +44,83 @@ export const readableAnswer = (answer: Answer, read: ReadScenario): string => {
     .join('\n\n')
 }
 
-const hours = (time: Time): string => formatQuantity(time, 'time', 'h')
-const at = (temperature: Temperature | undefined): string =>
-  temperature === undefined ? '' : ` at ${formatQuantity(temperature, 'temperature', 'degC')}`
-
-const answerSentence = (answer: Answer): string => {
+const answerSentence = (answer: Answer, read: ReadScenario): string => {
   const { ask } = answer
-  const dose = answer.dose === undefined ? undefined : formatQuantity(answer.dose, 'mass', 'kg')
-  const withDose = dose === undefined ? '' : ` with a dose of ${dose}`
   if (ask.find === 'trace') return 'The course of the batch:'
-  const target = 'conversion' in ask ? `${percent(ask.conversion, 4)} conversion` : 'the conversion'
-  if (!answer.reachable) return `${target} is not reached${withDose}${at(answer.temperature)}.`
-  switch (ask.find) {
-    case 'time':
-      return answer.time === undefined
-        ? `${target} is reached${withDose}.`
-        : `${target} is reached ${hours(answer.time)} after the first dose${withDose}${at(answer.temperature)}.`
-    case 'dose':
-      return dose === undefined
-        ? `${target} is reached within ${hours(ask.within)}.`
-        : `A dose of ${dose} reaches ${target} within ${hours(ask.within)}${at(answer.temperature)}.`
-    case 'temperature':
-      return bestTemperature(
-        answer,
-        ask.best === 'time' ? `${target} soonest` : `furthest within ${hours(ask.within)}`,
-      )
-    default:
-      return ask satisfies never
+  if (ask.find === 'temperature') return bestTemperature(answer, ask)
+  const target = `${percent(ask.conversion, 4)} conversion`
+  const dose = answer.dose === undefined ? '' : `${formatNumberUp(answer.dose)} kg`
+  const { programme } = read.scenario
+  if (!answer.reachable) {
+    if (ask.find === 'dose') return `No dose reaches ${target} within ${hours(ask.within)}.`
+    return `${dose === '' ? '' : `Dose ${dose}${where(answer, read)}: `}${target} is not reached${programme.kind === 'phases' ? ' by the end of the programme' : ''}.`
   }
+  const time = answer.time === undefined ? '' : enoughHours(answer.time)
+  if (programme.kind === 'phases') {
+    const doses = dose === '' ? '' : `, with ${dose} of enzyme in all`
+    return `${target} is reached ${time} after the first dose${doses}${money(answer)}.`
+  }
+  return `Dose ${dose}, hold ${time}${where(answer, read)}: ${target}${money(answer)}.`
 }
 
-const bestTemperature = (answer: Answer, aim: string): string => {
-  const best =
-    answer.temperature === undefined ? '' : formatQuantity(answer.temperature, 'temperature', 'degC')
-  const reached = [
-    ...(answer.time === undefined ? [] : [`in ${hours(answer.time)}`]),
-    ...(answer.conversion === undefined ? [] : [`to ${percent(answer.conversion, 4)} conversion`]),
-  ].join(' ')
-  return `The batch comes to ${aim} at ${best}${reached === '' ? '' : `: ${reached}`}.`
+/** Rounded up, so that the hold read out is long enough. */
+const enoughHours = (time: Time): string => `${formatNumberUp(time / 3600)} h`
+
+const bestTemperature = (answer: Answer, ask: Extract<Ask, { find: 'temperature' }>): string => {
+  const best = answer.temperature === undefined ? 'no temperature of the range' : degrees(answer.temperature)
+  if (ask.best === 'time') {
+    const target = `${percent(ask.conversion, 4)} conversion`
+    return answer.reachable && answer.time !== undefined
+      ? `${target} is reached soonest at ${best}: in ${enoughHours(answer.time)}${money(answer)}.`
+      : `${target} is not reached at any temperature of the range.`
+  }
+  const reached = answer.conversion === undefined ? '' : `: ${percent(answer.conversion, 4)}`
+  return `Within ${hours(ask.within)} conversion is highest at ${best}${reached}${money(answer)}.`
 }
 
-const limitSentences = (answer: Answer): readonly string[] => [
-  ...(answer.limitingConversion === undefined || answer.reachable
-    ? []
-    : [`However long the hold, conversion comes to rest at ${percent(answer.limitingConversion, 4)}.`]),
-  ...(answer.leastDose === undefined
-    ? []
-    : [`Below a dose of ${formatQuantity(answer.leastDose, 'mass', 'kg')} the target is never reached.`]),
-]
+const where = (answer: Answer, read: ReadScenario): string => {
+  const { programme } = read.scenario
+  const temperature =
+    answer.temperature ?? (programme.kind === 'constant' ? programme.temperature : undefined)
+  return temperature === undefined ? '' : ` at ${degrees(temperature)}`
+}
 
-const costSentence = (answer: Answer): readonly string[] =>
-  answer.cost === undefined
-    ? []
-    : [`The batch costs ${formatNumber(answer.cost.value)} ${answer.cost.currency}.`]
+const money = (answer: Answer): string => {
+  if (answer.cost === undefined) return ''
+  const { value, currency } = answer.cost
+  return `, ${value < 100 ? value.toFixed(2) : formatNumber(value)} ${currency} a batch`
+}
 
-const killSentences = (answer: Answer): readonly string[] =>
-  answer.killStep === undefined
-    ? []
-    : [
-        `After the kill step ${percent(answer.killStep.residualActivity, 2)} of the enzyme charged is active; the step takes it down by ${formatNumber(answer.killStep.logReduction, 2)} powers of ten.`,
-      ]
+const limitSentences = (answer: Answer, read: ReadScenario): readonly string[] => {
+  const rest = answer.limitingConversion
+  const hold =
+    read.scenario.programme.kind === 'constant' ? 'However long the hold, conversion' : 'Conversion'
+  return [
+    ...(rest === undefined || answer.reachable ? [] : [`${hold} comes to rest at ${percent(rest, 4)}.`]),
+    ...(answer.leastDose === undefined
+      ? []
+      : [`Below a dose of ${kilograms(answer.leastDose)} the target is never reached.`]),
+  ]
+}
+
+const killSentences = (answer: Answer): readonly string[] => {
+  if (answer.killStep === undefined) return []
+  const { residualActivity, logReduction } = answer.killStep
+  const left = residualActivity < 1e-9 ? 'less than a billionth' : percent(residualActivity, 2)
+  const down = logReduction > 12 ? 'more than 12' : formatNumber(logReduction, 2)
+  return [
+    `After the kill step ${left} of the enzyme charged is active; the step takes it down by ${down} powers of ten.`,
+  ]
+}
 
 const checkSentence = (answer: Answer): string => {
-  const good = answer.precision === undefined ? '' : ` About ${answer.precision.digits} digits are good.`
+  const method = checkMethodSentence(answer.check.method)
+  const digits = answer.precision?.digits
+  const good = digits === undefined || digits > 6 ? '' : ` About ${formatNumber(digits, 2)} digits are good.`
   const { relativeDifference } = answer.check
-  if (relativeDifference === null)
-    return `Check by ${checkMethodSentence(answer.check.method)}: no result.${good}`
-  return `Check by ${checkMethodSentence(answer.check.method)}: differs by ${formatNumber(relativeDifference, 1)} of the value.${good}`
+  return relativeDifference === null
+    ? `Check by ${method}: it gave no result.${good}`
+    : `Check by ${method}: the two agree to ${formatNumber(Math.abs(relativeDifference), 1)} of the value.${good}`
 }
 
 const cautionLines = (answer: Answer, read: ReadScenario): readonly string[] => {

@@ -15,9 +15,14 @@ import {
   type Warning,
 } from '../../engine/index.ts'
 
-const hours = (time: Time): string => formatQuantity(time, 'time', 'h')
-const degrees = (temperature: Temperature): string => formatQuantity(temperature, 'temperature', 'degC')
-const kilograms = (mass: Mass): string => formatQuantity(mass, 'mass', 'kg')
+/** "9.41 h" */
+export const hours = (time: Time): string => formatQuantity(time, 'time', 'h')
+
+/** "42 °C" */
+export const degrees = (temperature: Temperature): string => `${formatNumber(temperature - 273.15)} °C`
+
+/** "3.5 kg" */
+export const kilograms = (mass: Mass): string => formatQuantity(mass, 'mass', 'kg')
 
 /** A share of one as a percentage: "95 %". */
 export const percent = (share: number, significant = 3): string =>
@@ -154,5 +159,5 @@ export const cautions = {
   killStep: 'Hot liquid and jackets scald; mind them in the kill step.',
   acids: 'Adjusting the pH means strong acids or alkalis; handle them as their safety data sheets say.',
   prediction:
-    "A prediction supports, and never replaces, the site's validated procedures and assays on the batch itself.",
+    "Predictions support, and never replace, the site's validated procedures, assays on the batch itself, food and pharmaceutical law, local codes and licensed practice.",
 } as const

@@ -29,6 +29,18 @@ export const formatNumber = (value: number, significant = 3): string => {
   return trimmed(value.toFixed(Math.min(100, Math.max(0, significant - whole))))
 }
 
+/**
+ * The same, rounded away from zero: for a dose or a hold that must be enough. What lies within a millionth of
+ * the shorter number counts as that number.
+ */
+export const formatNumberUp = (value: number, significant = 3): string => {
+  const near = formatNumber(value, significant)
+  const size = Math.abs(value)
+  if (Math.abs(Number(near)) >= size * (1 - 1e-6) || size >= 1e6 || size < 1e-3) return near
+  const decimals = Math.max(0, significant - Math.floor(Math.log10(size)) - 1)
+  return trimmed((Number(near) + Math.sign(value) * 10 ** -decimals).toFixed(decimals))
+}
+
 /** A quantity for reading: "9.41 h". An unknown unit shows the value in SI without one. */
 export const formatQuantity = <D extends DimensionName>(
   value: Quantity<D>,

@@ -1,7 +1,9 @@
-import { expect, test } from 'vitest'
+import { expect, test, vi } from 'vitest'
 import { readScenario } from '../../../app/contract/index.ts'
 import { badInputs } from './bad-inputs.ts'
 import { edited, phased, shortForm } from './scenarios.ts'
+
+vi.setConfig({ testTimeout: 60_000 })
 
 const faultLines = (text: string): readonly string[] => {
   const read = readScenario(text)

@@ -1,9 +1,11 @@
 import { Ajv2020 } from 'ajv/dist/2020.js'
 import fc from 'fast-check'
-import { expect, test } from 'vitest'
+import { expect, test, vi } from 'vitest'
 import { readScenario, scenarioSchema } from '../../../app/contract/index.ts'
 import { badInputs } from './bad-inputs.ts'
 import { edited, type Json, phased, shortForm } from './scenarios.ts'
+
+vi.setConfig({ testTimeout: 60_000 })
 
 const fits = new Ajv2020({
   strict: true,
@@ -104,7 +106,7 @@ test('whatever the reader takes, the schema takes', () => {
       return !readScenario(text).ok || fits(JSON.parse(text))
     },
   )
-  fc.assert(property, { numRuns: 4000 })
+  fc.assert(property, { numRuns: 1500 })
 })
 
 test('the schema describes itself to an editor', () => {

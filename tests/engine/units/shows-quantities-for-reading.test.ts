@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest'
-import { formatNumber, formatQuantity, inUnit } from '../../../engine/units/display.ts'
+import { formatNumber, formatNumberUp, formatQuantity, inUnit } from '../../../engine/units/display.ts'
 import { nearest } from '../../../engine/units/nearest.ts'
 import { celsius, hours, type Mass, quantity } from '../../../engine/units/quantity.ts'
 
@@ -21,6 +21,19 @@ test.each<[number, number, string]>([
   [100, 2, '100'],
 ])('%d with %d digits is %s', (value, digits, text) => {
   expect(formatNumber(value, digits)).toBe(text)
+})
+
+test.each<[number, string]>([
+  [3.361, '3.37'],
+  [3.3599999999, '3.36'],
+  [3.3600000001, '3.36'],
+  [9.994, '10'],
+  [99.91, '100'],
+  [1234.2, '1235'],
+  [10, '10'],
+  [0.01231, '0.0124'],
+])('%d, which must be enough, is %s', (value, text) => {
+  expect(formatNumberUp(value)).toBe(text)
 })
 
 test('a quantity is shown in the unit asked', () => {
