@@ -19,12 +19,15 @@ import {
   type Programme,
   quantity,
   type Scenario,
+  type SpecificRate,
   type TemperatureEffect,
 } from '../../engine/index.ts'
-import type { GivenConcentration } from './definition/concentration.ts'
 import type { ScenarioFile } from './definition/scenario-file.ts'
 
-type ByMass = (given: GivenConcentration) => Concentration
+/** Takes a value by mass as it is, and a molar one times the substrate's molar mass. */
+type ByMass = <Q extends Concentration | SpecificRate>(given: Molar<Q>) => Q
+
+type Molar<Q> = { readonly by: 'mass'; readonly value: Q } | { readonly by: 'amount'; readonly value: number }
 
 /** The scenario a sound file describes. */
 export const toScenario = (file: ScenarioFile): Scenario => {
@@ -44,7 +47,7 @@ export const toScenario = (file: ScenarioFile): Scenario => {
 const massWith =
   (molarMass: MolarMass | undefined): ByMass =>
   (given) =>
-    given.by === 'mass' ? given.value : quantity<Concentration>(given.value * due(molarMass))
+    given.by === 'mass' ? given.value : quantity(given.value * due(molarMass))
 
 const toFeed = (feed: ScenarioFile['feed'], byMass: ByMass): Feed => {
   const { molarMass, molesPerSubstrate, ...product } = feed.product
@@ -63,11 +66,12 @@ const toFeed = (feed: ScenarioFile['feed'], byMass: ByMass): Feed => {
 
 const toEnzyme = (enzyme: ScenarioFile['enzyme'], byMass: ByMass): Enzyme => {
   const { rate, temperature, pH, inactivation, ...rest } = enzyme
-  const { activity, Km, Kic, Kiu, Ksi, ...plain } = rate
+  const { specificRate, activity, Km, Kic, Kiu, Ksi, ...plain } = rate
   return {
     ...rest,
     rate: {
       ...plain,
+      ...(specificRate === undefined ? {} : { specificRate: byMass(specificRate) }),
       ...(activity === undefined ? {} : { activity: toActivity(activity, byMass) }),
       Km: byMass(Km),
       ...(Kic === undefined ? {} : { Kic: byMass(Kic) }),

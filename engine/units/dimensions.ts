@@ -114,6 +114,12 @@ const table = {
     usual: ['g/g/h', 'g/g/min', 'g/mg/min', 'mg/mg/h', 'kg/kg/h'],
     example: '95 g/g/h',
   },
+  'molar specific rate': {
+    called: 'a molar specific rate (amount of substrate per mass of enzyme preparation and time)',
+    units: per(per(amount, mass), time),
+    usual: ['mmol/g/h', 'mol/kg/h'],
+    example: '280 mmol/g/h',
+  },
   'activity per mass': {
     called: 'an activity per mass of preparation',
     units: [...per(turnover, mass), ...per(per(amount, time), mass)],

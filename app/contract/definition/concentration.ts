@@ -1,11 +1,20 @@
-/** Concentrations of substrate and product: by mass, or molar and then of the substrate. */
-import { type Concentration, type Quantity, quantity } from '../../../engine/index.ts'
+/** Values by mass, or molar and then counted in the substrate. */
+import {
+  type Concentration,
+  type DimensionName,
+  type Quantity,
+  quantity,
+  type SpecificRate,
+} from '../../../engine/index.ts'
 import { eitherField, type Range } from './fields.ts'
 
 /** As given; a molar one still waits for the substrate's molar mass. */
-export type GivenConcentration =
-  | { readonly by: 'mass'; readonly value: Concentration }
-  | { readonly by: 'amount'; readonly value: Quantity<'molar concentration'> }
+export type Given<Q, M extends DimensionName> =
+  | { readonly by: 'mass'; readonly value: Q }
+  | { readonly by: 'amount'; readonly value: Quantity<M> }
+
+export type GivenConcentration = Given<Concentration, 'molar concentration'>
+export type GivenSpecificRate = Given<SpecificRate, 'molar specific rate'>
 
 /** A concentration by mass or molar. */
 export const concentrationField = (title: string, range: Range, example = '45 g/L') =>
@@ -17,4 +26,16 @@ export const concentrationField = (title: string, range: Range, example = '45 g/
       dimension === 'concentration'
         ? { by: 'mass', value: quantity<Concentration>(value) }
         : { by: 'amount', value: quantity<Quantity<'molar concentration'>>(value) },
+  )
+
+/** Mass of substrate, or its amount, per mass of preparation and time. */
+export const specificRateField = (title: string) =>
+  eitherField(
+    ['specific rate', 'molar specific rate'],
+    'above',
+    { title },
+    (dimension, value): GivenSpecificRate =>
+      dimension === 'specific rate'
+        ? { by: 'mass', value: quantity<SpecificRate>(value) }
+        : { by: 'amount', value: quantity<Quantity<'molar specific rate'>>(value) },
   )

@@ -7,7 +7,7 @@ import {
   type VolumetricActivity,
 } from '../../../engine/index.ts'
 import { complain, exactlyOne, given, needs, onObject } from './clashes.ts'
-import { concentrationField } from './concentration.ts'
+import { concentrationField, specificRateField } from './concentration.ts'
 import { eitherField, numberField, phField, quantityField, record, textField } from './fields.ts'
 import { inactivation } from './inactivation.ts'
 
@@ -43,9 +43,9 @@ const activity = record('a declared activity and how it was measured', {
 })
 
 const rate = record('the rate law and its constants', {
-  specificRate: quantityField('specific rate', 'above', {
-    title: 'the specific rate (saturated and uninhibited, at the reference)',
-  }).exactOptional(),
+  specificRate: specificRateField(
+    'the specific rate (saturated and uninhibited, at the reference)',
+  ).exactOptional(),
   activity: activity.exactOptional(),
   reference: conditions('where the specific rate holds').exactOptional(),
   Km: concentrationField('Km', 'above', '8 g/L'),

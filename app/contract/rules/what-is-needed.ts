@@ -27,7 +27,7 @@ export const molarMassWhereNeeded = (file: unknown, ctx: Ctx): void => {
 const usersOfMolarMass = (file: unknown): readonly string[] => [
   ...(part(file, 'enzyme', 'rate', 'activity') === undefined ? [] : ['enzyme.rate.activity']),
   ...(part(file, 'feed', 'product', 'molarMass') === undefined ? [] : ['feed.product.molarMass']),
-  ...molarValues(file).map(({ path }) => `${pathText(path)}, a molar concentration,`),
+  ...molarValues(file).map(({ path }) => `${pathText(path)}, given in moles,`),
 ]
 
 interface MolarValue {
@@ -53,6 +53,7 @@ const molarPlaces = [
   ['feed', 'substrate', 'concentration'],
   ['feed', 'product', 'concentration'],
   ['enzyme', 'rate', 'activity', 'assay', 'substrate'],
+  ['enzyme', 'rate', 'specificRate'],
   ['enzyme', 'rate', 'Km'],
   ['enzyme', 'rate', 'Kic'],
   ['enzyme', 'rate', 'Kiu'],

@@ -329,8 +329,13 @@ export const badInputs: readonly (readonly [name: string, text: string, faults: 
   [
     'a molar constant without the molar mass',
     short(['enzyme.rate.Km', '23 mmol/L'], ['feed.substrate.molarMass', undefined]),
+    ['feed.substrate.molarMass: is missing; enzyme.rate.Km, given in moles, needs it, such as "342.3 g/mol"'],
+  ],
+  [
+    'a specific rate in moles without the molar mass',
+    short(['enzyme.rate.specificRate', '360 mmol/g/h'], ['feed.substrate.molarMass', undefined]),
     [
-      'feed.substrate.molarMass: is missing; enzyme.rate.Km, a molar concentration, needs it, such as "342.3 g/mol"',
+      'feed.substrate.molarMass: is missing; enzyme.rate.specificRate, given in moles, needs it, such as "342.3 g/mol"',
     ],
   ],
   [
@@ -689,6 +694,11 @@ export const badInputs: readonly (readonly [name: string, text: string, faults: 
     'a trace of one text',
     short(['ask', { find: 'trace', at: '1 h' }]),
     ['ask.at: found "1 h"; at is a list of times, such as ["0 h", "1 h"]'],
+  ],
+  [
+    'a molar value that leaves doubles',
+    short(['enzyme.rate.Kiu', '1e-305 umol/m3'], ['feed.substrate.molarMass', '1e-20 g/mol']),
+    ['enzyme.rate.Kiu: leaves the range of doubles when it is converted through the molar mass'],
   ],
   [
     'many faults in the order of the file',

@@ -154,6 +154,11 @@ test('an activity by volume', () => {
   expect(rate.activity?.declared.value).toBeCloseTo(0.08333333333333333, 15)
 })
 
+test('a specific rate in moles', () => {
+  const { rate } = short(['enzyme.rate.specificRate', '360 mmol/g/h']).enzyme
+  expect(rate.specificRate).toBeCloseTo(0.1 * 0.3423, 14)
+})
+
 test('molar constants are of the substrate', () => {
   const { rate, inactivation } = short(
     ['enzyme.rate.Km', '23 mmol/L'],

@@ -51,7 +51,7 @@ test('the schema takes every form of a sound file', () => {
 
 // What a schema cannot know: what parts of a file mean together, and what text becomes as a double.
 const beyondSchema = [
-  /needs it|needs the molar mass|needs the dose/,
+  /needs it|leaves the range|needs the molar mass|needs the dose/,
   /in force|never brings|before any dose|before the first dose|kill step|no phase gives a dose|empty list/,
   /finite number|double|not answered together|one currency|currency code|lower to the higher|keep one of them|absolute zero/,
 ]
