@@ -7,7 +7,7 @@ export const badKeys: readonly BadInputCase[] = [
     what: 'an unknown key near a known one',
     input: changed('"Km"', '"KM"'),
     lines: [
-      'enzyme.rate.Km: is missing; write a concentration by mass as a text with its unit, such as "8 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
+      'enzyme.rate.Km: is missing; write a concentration as a text with its unit, such as "8 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
       'enzyme.rate.KM: the key "KM" is not known here; the nearest known one is "Km"',
     ],
   },
@@ -25,7 +25,7 @@ export const badKeys: readonly BadInputCase[] = [
     what: 'a key missing',
     input: changed('"Km": "8 g/L", ', ''),
     lines: [
-      'enzyme.rate.Km: is missing; write a concentration by mass as a text with its unit, such as "8 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
+      'enzyme.rate.Km: is missing; write a concentration as a text with its unit, such as "8 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
     ],
   },
   {
@@ -62,7 +62,7 @@ export const badKeys: readonly BadInputCase[] = [
     what: 'molar concentrations without a molar mass',
     input: changed('"molarMass": "342.3 g/mol", "concentration": "45 g/L"', '"concentration": "130 mmol/L"'),
     lines: [
-      'feed.substrate.molarMass: is missing; feed.substrate.concentration, a molar concentration, needs it, such as "342.3 g/mol"',
+      'feed.substrate.molarMass: is missing; feed.substrate.concentration, given in moles, needs it, such as "342.3 g/mol"',
     ],
   },
   {
@@ -163,8 +163,8 @@ export const badKeys: readonly BadInputCase[] = [
     input: changed('"45 g/L"', '45').replace('"12 m3"', '"12"').replace('0.9 }', '2 }'),
     lines: [
       'feed.volume: found "12" without a unit; write a volume as "12 m3" (units that fit: m3, L, mL)',
-      'feed.substrate.concentration: found the bare number 45 where a unit is due; write a concentration by mass as a text with its unit, such as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
-      'ask.conversion: found 2; conversion must be a plain number above 0 and below 1',
+      'feed.substrate.concentration: found the bare number 45 where a unit is due; write a concentration as a text with its unit, such as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
+      'ask.conversion: found 2; the conversion must be a plain number above 0 and below 1',
     ],
   },
 ]

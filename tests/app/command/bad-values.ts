@@ -7,21 +7,21 @@ export const badValues: readonly BadInputCase[] = [
     what: 'no unit',
     input: changed('"45 g/L"', '"45"'),
     lines: [
-      'feed.substrate.concentration: found "45" without a unit; write a concentration by mass as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
+      'feed.substrate.concentration: found "45" without a unit; write a concentration as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
     ],
   },
   {
     what: 'a bare number',
     input: changed('"45 g/L"', '45'),
     lines: [
-      'feed.substrate.concentration: found the bare number 45 where a unit is due; write a concentration by mass as a text with its unit, such as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
+      'feed.substrate.concentration: found the bare number 45 where a unit is due; write a concentration as a text with its unit, such as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
     ],
   },
   {
     what: 'a unit of the wrong dimension',
     input: changed('"45 g/L"', '"45 degC"'),
     lines: [
-      'feed.substrate.concentration: found "45 degC", where degC is a unit of temperature; a concentration by mass is due here (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
+      'feed.substrate.concentration: found "45 degC", where degC is a unit of temperature; a concentration is due here (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
     ],
   },
   {
@@ -57,59 +57,59 @@ export const badValues: readonly BadInputCase[] = [
     what: 'below absolute zero',
     input: changed('"42 degC"', '"-300 degC"'),
     lines: [
-      'programme.temperature: found "-300 degC"; temperature held throughout must be above absolute zero (-273.15 degC)',
+      'programme.temperature: found "-300 degC"; the temperature held throughout must be above absolute zero (-273.15 degC)',
     ],
   },
   {
     what: 'pH 15',
     input: changed('"pH": 6.7, "dose"', '"pH": 15, "dose"'),
-    lines: ['programme.pH: found 15; pH held throughout must be a plain number from 0 to 14'],
+    lines: ['programme.pH: found 15; the pH held throughout must be a plain number from 0 to 14'],
   },
   {
     what: 'pH as a text',
     input: changed('"pH": 6.7, "dose"', '"pH": "6.7", "dose"'),
-    lines: ['programme.pH: found "6.7"; pH held throughout must be a plain number from 0 to 14'],
+    lines: ['programme.pH: found "6.7"; the pH held throughout must be a plain number from 0 to 14'],
   },
   {
     what: '1e999',
     input: changed('0.5263', '1e999'),
     lines: [
-      'feed.product.massYield: found a number beyond the range of doubles; mass of product per mass of substrate must be a plain number above 0',
+      'feed.product.massYield: found a number beyond the range of doubles; the mass of product per mass of substrate must be a plain number above 0',
     ],
   },
   {
     what: '1e999 with a unit',
     input: changed('"45 g/L"', '"1e999 g/L"'),
     lines: [
-      'feed.substrate.concentration: found "1e999 g/L", which is not a finite number; write a concentration by mass as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
+      'feed.substrate.concentration: found "1e999 g/L", which is not a finite number; write a concentration as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
     ],
   },
   {
     what: 'NaN with a unit',
     input: changed('"45 g/L"', '"NaN g/L"'),
     lines: [
-      'feed.substrate.concentration: found "NaN g/L", which is not a finite number; write a concentration by mass as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
+      'feed.substrate.concentration: found "NaN g/L", which is not a finite number; write a concentration as "45 g/L" (units that fit: g/L, mg/L, kg/m3, mmol/L, mol/L)',
     ],
   },
   {
     what: 'conversion 1',
     input: changed('0.9 }', '1 }'),
-    lines: ['ask.conversion: found 1; conversion must be a plain number above 0 and below 1'],
+    lines: ['ask.conversion: found 1; the conversion must be a plain number above 0 and below 1'],
   },
   {
     what: 'conversion 0',
     input: changed('0.9 }', '0 }'),
-    lines: ['ask.conversion: found 0; conversion must be a plain number above 0 and below 1'],
+    lines: ['ask.conversion: found 0; the conversion must be a plain number above 0 and below 1'],
   },
   {
     what: 'conversion in percent',
     input: changed('0.9 }', '90 }'),
-    lines: ['ask.conversion: found 90; conversion must be a plain number above 0 and below 1'],
+    lines: ['ask.conversion: found 90; the conversion must be a plain number above 0 and below 1'],
   },
   {
     what: 'a volume of nothing',
     input: changed('"12 m3"', '"0 m3"'),
-    lines: ['feed.volume: found "0 m3"; volume charged must be above 0'],
+    lines: ['feed.volume: found "0 m3"; the volume charged must be above 0'],
   },
   {
     what: 'another format',
