@@ -14,12 +14,13 @@ export interface Comparison {
 /** Difference relative to the value due, or to the floor where that is larger; 0 where the two are equal. */
 export const relativeDifference = ({ got, due, floor = 0 }: Comparison): number => {
   if (got === undefined || Number.isNaN(got)) return Number.POSITIVE_INFINITY
-  return got === due ? 0 : Math.abs(got - due) / Math.max(Math.abs(due), floor)
+  if (got === due) return 0
+  return Math.abs(got - due) / Math.max(Math.abs(due), floor)
 }
 
 export interface Tally {
-  /** Expects every comparison to hold; all that do not are named together. */
-  readonly hold: (where: string, comparisons: readonly Comparison[]) => void
+  /** Expects every comparison to hold; all that do not are named together, beside what was given. */
+  readonly hold: (where: string, comparisons: readonly Comparison[], given?: string) => void
   /** The worst difference, and the largest share that any took of what it was allowed. */
   readonly worst: () => string
 }
@@ -30,7 +31,7 @@ export const tally = (name: string): Tally => {
   let worst = { difference: 0, at: 'none' }
   let fullest = { share: 0, at: 'none' }
   return {
-    hold: (where, comparisons) => {
+    hold: (where, comparisons, given = where) => {
       expect(comparisons.length).toBeGreaterThan(0)
       const apart: string[] = []
       for (const comparison of comparisons) {
@@ -42,7 +43,7 @@ export const tally = (name: string): Tally => {
         if (difference / within > fullest.share) fullest = { share: difference / within, at }
         if (!(difference <= within)) apart.push(`${what}: ${got} for ${due}, ${difference} of ${within}`)
       }
-      expect(apart, where).toEqual([])
+      expect(apart, given).toEqual([])
     },
     worst: () =>
       `${name}: ${count} numbers, worst ${worst.difference.toExponential(1)} (${worst.at}), ` +
