@@ -31,8 +31,8 @@ const answered = (one: OptimumCase, ask: Ask): Answer => {
 }
 const between = ({ inputs }: OptimumCase) => [celsius(inputs.T_min), celsius(inputs.T_max)] as const
 const warned = (answer: Answer): boolean => answer.warnings.some(({ code }) => code === 'optimum-at-bound')
-/** 1e-5 K of an absolute temperature. */
-const kelvins = (one: OptimumCase): number => 1e-5 / celsius(one.expected.T_opt)
+/** 1e-8 K of an absolute temperature: what the root of a slope gives, and comparing values does not. */
+const kelvins = (one: OptimumCase): number => 1e-8 / celsius(one.expected.T_opt)
 
 describe('the temperature of the shortest time', () => {
   test.each(shortest)('$id', (one) => {
