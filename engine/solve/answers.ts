@@ -25,6 +25,18 @@ export function checkOf(solver: Solver, answer: number, other: number | null): C
   }
 }
 
+/** Stepping knows the substrate, not what little of it was converted; below this the difference is of this. */
+const leastConversion = 1e-3
+
+/** Compares two conversions that should be one. */
+export function checkOfConversion(solver: Solver, answer: number, other: number | null): Check {
+  const scale = Math.max(Math.abs(answer), leastConversion)
+  return {
+    method: solver.checkMethod,
+    relativeDifference: other === null ? null : Math.abs(other - answer) / scale,
+  }
+}
+
 /** Warnings about the check. */
 export function checkWarnings(check: Check, factor = 1): Warning[] {
   const { relativeDifference } = check

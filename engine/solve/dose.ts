@@ -1,6 +1,7 @@
 /** The dose: for a time, and the least one with which a target is reached at all. */
 import { bracketedRoot } from '../numeric/roots.ts'
 import { failed, type Outcome, success } from '../outcome.ts'
+import { equilibriumBefore } from './equilibrium.ts'
 import type { Route, RouteFailure } from './route.ts'
 import { pathOf, supplyUntil } from './separation.ts'
 import type { Solver } from './solver.ts'
@@ -29,16 +30,15 @@ export function doseScaleFor(
 ): Outcome<DoseScale, RouteFailure> {
   const { batch } = solver
   const conditional = batch.timeline.steps.some((step) => step.kind === 'run' && step.until !== undefined)
-  if (solver.separable) {
+  const equilibrium = equilibriumBefore(batch, conversion)
+  if (equilibrium !== undefined) return success({ kind: 'none', limit: Math.max(0, equilibrium) })
+  if (solver.separable && !conditional) {
     const path = pathOf(batch)
     const u = path.coordinate(conversion)
-    if (u === null) return success({ kind: 'none', limit: Math.max(0, path.restingConversion) })
-    if (!conditional) {
-      const supply = supplyUntil(batch, until, endless)
-      if (!supply.ok) return failed(supply.failure)
-      const scale = path.demand(u) / supply.value
-      return success(Number.isFinite(scale) ? { kind: 'scale', scale } : { kind: 'none', limit: 0 })
-    }
+    const supply = supplyUntil(batch, until, endless)
+    if (!supply.ok) return failed(supply.failure)
+    const scale = u === null ? Number.NaN : path.demand(u) / supply.value
+    return success(Number.isFinite(scale) ? { kind: 'scale', scale } : { kind: 'none', limit: 0 })
   }
   return searchScale(solver.answers, conversion, until, endless)
 }

@@ -3,7 +3,14 @@ import type { Warning } from '../answer.ts'
 import { failed, type Outcome, success } from '../outcome.ts'
 import type { Ask, Scenario } from '../scenario.ts'
 import { type Mass, quantity, type Temperature, type Time } from '../units/quantity.ts'
-import { type AnswerBody, checkOf, conditionWarnings, massBalanceOf, workOf } from './answers.ts'
+import {
+  type AnswerBody,
+  checkOf,
+  checkOfConversion,
+  conditionWarnings,
+  massBalanceOf,
+  workOf,
+} from './answers.ts'
 import { bestTemperature, checkedTemperature } from './best-temperature.ts'
 import { restingConversion } from './reach.ts'
 import { reachabilityRemedies } from './remedies.ts'
@@ -70,7 +77,11 @@ function never(
   return success({
     reachable: false,
     limitingConversion: limit,
-    check: checkOf(solver, ended.value.end.conversion, other.ok ? other.value.end.conversion : null),
+    check: checkOfConversion(
+      solver,
+      ended.value.end.conversion,
+      other.ok ? other.value.end.conversion : null,
+    ),
     remedies: reachabilityRemedies(kept, solver, conversion),
     work: other.ok ? workOf(ended.value, other.value) : ended.value.work,
     massBalance: massBalanceOf([ended.value.end]),

@@ -7,6 +7,7 @@ import { type Mass, quantity, type Temperature, type Time } from '../units/quant
 import {
   type AnswerBody,
   checkOf,
+  checkOfConversion,
   checkWarnings,
   conditionWarnings,
   gaveUp,
@@ -15,11 +16,11 @@ import {
   workOf,
 } from './answers.ts'
 import { leastDoseScale } from './dose.ts'
+import { equilibriumBefore } from './equilibrium.ts'
 import { hoursLedger } from './hours.ts'
 import { amplification, honestDigits, reach, restingConversion } from './reach.ts'
 import { reachabilityRemedies, shorteningRemedies } from './remedies.ts'
 import type { RouteFailure } from './route.ts'
-import { pathOf } from './separation.ts'
 import type { Solver } from './solver.ts'
 
 /** A time above this is warned about, s: a year. */
@@ -89,13 +90,11 @@ function unreachable(
   if (!ended.ok) return failed(ended.failure)
   const ending = solver.checks({ doseScale: 1, endless: false })
   const atEnd = ended.value.end.conversion
-  const check = checkOf(solver, atEnd, ending.ok ? ending.value.end.conversion : null)
+  const check = checkOfConversion(solver, atEnd, ending.ok ? ending.value.end.conversion : null)
   warnings.push(...gaveUp(ending), ...checkWarnings(check))
-  if (solver.separable) {
-    const equilibrium = pathOf(solver.batch).restingConversion
-    if (equilibrium <= conversion)
-      warnings.push({ code: 'beyond-equilibrium', equilibriumConversion: equilibrium })
-  }
+  const equilibriumConversion = equilibriumBefore(solver.batch, conversion)
+  if (equilibriumConversion !== undefined)
+    warnings.push({ code: 'beyond-equilibrium', equilibriumConversion })
   return success({
     reachable: false,
     conversion: atEnd,

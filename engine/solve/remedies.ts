@@ -4,6 +4,7 @@ import type { Phase, Scenario } from '../scenario.ts'
 import { type Mass, quantity, type Temperature, type Time } from '../units/quantity.ts'
 import { bestTemperature } from './best-temperature.ts'
 import { doseScaleFor, leastDoseScale } from './dose.ts'
+import { equilibriumBefore } from './equilibrium.ts'
 import { timeTo } from './reach.ts'
 import { type Solver, solverOf } from './solver.ts'
 import { atHoldTemperature, atPh, dosedAtOnce, holdTemperature, withHalfTheInhibition } from './variants.ts'
@@ -54,6 +55,8 @@ const mostDoses = 24
 
 /** Changes that make an unreachable target reachable, the quickest first. */
 export function reachabilityRemedies(scenario: Scenario, solver: Solver, conversion: number): Remedy[] {
+  // Beyond the equilibrium neither dose nor temperature nor time gets anywhere.
+  if (equilibriumBefore(solver.batch, conversion) !== undefined) return []
   const found: Remedy[] = []
   const consider = (remedy: Remedy): void => {
     if (Number.isFinite(remedy.time) && remedy.time >= 0) found.push(remedy)
