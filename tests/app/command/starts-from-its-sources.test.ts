@@ -44,6 +44,17 @@ test('npm run -s dosewright answers, with nothing else on standard output', asyn
   expect(JSON.parse(npm.stdout)).toMatchObject({ format: 'dosewright-answer', version: 1, reachable: true })
 })
 
+test('the first answer comes within half a second of the call, the best of five', async () => {
+  const times: number[] = []
+  for (let n = 0; n < 5; n += 1) {
+    const began = performance.now()
+    const { code } = await start(root, ['plan', sample('starch-to-glucose')])
+    times.push(performance.now() - began)
+    expect(code).toBe(0)
+  }
+  expect(Math.min(...times)).toBeLessThan(500)
+})
+
 test('an edit of a source is followed by the next call', async () => {
   const time = async (): Promise<number> => {
     const { stdout } = await start(copy, ['plan', '-', '--json'], { input: soundScenario })
