@@ -129,7 +129,10 @@ function generalRates(
     const drive = (k * active) / (volume * D)
     const share = slow ? slow.share : 0
     const inflow = feed ? flow * feed.substrate : 0
-    out[0] = -drive * (1 - (inverseKeq === 0 ? 0 : (P * inverseKeq) / S)) + (inflow * (1 - share)) / fast
-    if (slow) out[1] = -drive * slow.relativeRate + (inflow * share) / late
+    // Spent substrate underflows to 0 while its logarithm falls on: without an inflow 0/0 must not arise.
+    out[0] =
+      -drive * (1 - (inverseKeq === 0 ? 0 : (P * inverseKeq) / S)) +
+      (inflow === 0 ? 0 : (inflow * (1 - share)) / fast)
+    if (slow) out[1] = -drive * slow.relativeRate + (inflow === 0 ? 0 : (inflow * share) / late)
   }
 }

@@ -3,11 +3,12 @@
  * restarted at every kink of the programme.
  */
 import type { Work } from '../answer.ts'
-import { createIntegrator } from '../integrate/integrator.ts'
-import type { Control, MethodChoice } from '../integrate/problem.ts'
+import { createIntegrator, type Integrator } from '../integrate/integrator.ts'
+import type { Control, MethodChoice, Problem } from '../integrate/problem.ts'
 import { failed, success } from '../outcome.ts'
 import { logRates, type Surroundings } from './log-rates.ts'
 import { type Mover, march } from './march.ts'
+import { levelOf, type Rest, restsOf, stillOf } from './rest.ts'
 import type { Batch, BatchState, Route } from './route.ts'
 import { temperatureAt } from './temperature-course.ts'
 import type { Run } from './timeline.ts'
@@ -25,22 +26,37 @@ export const standardExactness: Exactness = { tolerance: 1e-8, method: 'automati
 /** Logarithms of any size keep this share of themselves: an enzyme e^(−1e9) has no digits to keep. */
 const logRoundOff = 1e-13
 
-/** Where an endless run is cut, s: thirty thousand million years. */
-const endOfTime = 1e18
+/** Attempts after which the automatic choice of method is no longer trusted; ordinary batches take hundreds. */
+const patience = 20_000
 
-/** The route of any batch by integration. */
-export function odeRoute(batch: Batch, exactness: Exactness = standardExactness): Route {
-  const { model, feed } = batch
-  const size = (feed.substrate.slow ? 2 : 1) + (model.inactivation?.k2 ? 2 : 1)
-  const integrator = createIntegrator(size)
-  return (request) => march(batch, odeMover(batch, integrator, exactness), request)
+/** An event this near, in logarithms, has been met. */
+const located = 1e-9
+
+/** Where an endless run is cut, s: later than anything happens, save in numbers no plant has. */
+const endOfTime = 1e30
+
+/** Size of the state that a batch is integrated with. */
+const stateSize = ({ feed, model }: Batch): number =>
+  (feed.substrate.slow ? 2 : 1) + (model.inactivation?.k2 ? 2 : 1)
+
+/**
+ * The route of any batch by integration.
+ *
+ * Shapes   an integrator of the right size may be handed in and is then reused, run after run.
+ */
+export function odeRoute(
+  batch: Batch,
+  exactness: Exactness = standardExactness,
+  workspace?: Integrator,
+): Route {
+  let integrator = workspace
+  return (request) => {
+    integrator ??= createIntegrator(stateSize(batch))
+    return march(batch, odeMover(batch, integrator, exactness), request)
+  }
 }
 
-function odeMover(
-  batch: Batch,
-  integrator: ReturnType<typeof createIntegrator>,
-  exactness: Exactness,
-): Mover {
+function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): Mover {
   const { feed, model, preparationDensity, timeline } = batch
   const { slow } = feed.substrate
   const { inactivation, massYield } = model
@@ -126,46 +142,85 @@ function odeMover(
       const end = Math.min(length, endOfTime)
       const substrateFed = run.feed?.substrate ?? 0
       const supplied = charged + fedSubstrate
-      const control: Control = {
+      let control: Control = {
         relative: logRoundOff,
-        absolute: exactness.tolerance,
+        // An early target hangs on a small change of the logarithm, and that change has to be known as well.
+        absolute: Math.max(
+          10 * logRoundOff,
+          exactness.tolerance * Math.min(1, -Math.log1p(-(stopAt ?? 0.999))),
+        ),
         maxSteps: exactness.maxSteps,
         method: exactness.method,
         ...(step !== undefined && step > 0 && { firstStep: Math.min(step, end) }),
       }
-      const arrival = integrator.run(
-        {
-          rate: logRates(model, slow, run, start),
-          start: 0,
-          end,
-          initial: state,
-          ...(stopAt !== undefined && {
-            event: (τ: number, y: Float64Array) =>
-              Math.log(substrateIn(y) / ((1 - stopAt) * (supplied + fedAfter(run, τ) * substrateFed))),
-          }),
-          ...(outputs.length > 0 && { outputs: Float64Array.from(outputs, (τ) => Math.min(τ, end)) }),
-        },
-        control,
-      )
-      if (!arrival.ok) return failed(arrival.failure)
-      const { time, event, nextStep, outputs: rows, outputsReached } = arrival.value
-      work = {
-        stepsAccepted: work.stepsAccepted + arrival.value.work.stepsAccepted,
-        stepsRejected: work.stepsRejected + arrival.value.work.stepsRejected,
-        rateEvaluations: work.rateEvaluations + arrival.value.work.rateEvaluations,
-        jacobians: work.jacobians + arrival.value.work.jacobians,
-      }
+      const rate = logRates(model, slow, run, start)
+      let due =
+        stopAt === undefined
+          ? never
+          : (τ: number, y: ArrayLike<number>): number =>
+              Math.log(substrateIn(y) / ((1 - stopAt) * (supplied + fedAfter(run, τ) * substrateFed)))
+      let from = 0
+      const resting: Rest[] = []
+      let moving = run.feed ? [] : restsOf(batch, run, start, supplied, exactness.tolerance)
       const states: BatchState[] = []
-      for (let i = 0; i < outputsReached; i++) {
-        const row = rows.subarray(i * state.length, (i + 1) * state.length)
-        states.push(stateAt(row, run, outputs[i] as number, outputs[i] as number, start))
+      let stopped = false
+      let near = located
+      for (;;) {
+        const wanted = outputs.slice(states.length)
+        const arrival = passed(
+          {
+            rate: stillOf(rate, resting),
+            start: from,
+            end,
+            initial: state,
+            event: (τ, y) => Math.min(due(τ, y), levelOf(moving, y)),
+            ...(wanted.length > 0 && {
+              outputs: Float64Array.from(wanted, (τ) => Math.min(end, Math.max(from, τ))),
+            }),
+          },
+          control,
+        )
+        if (!arrival.ok) return failed(arrival.failure)
+        const { time, event, nextStep, outputs: rows, outputsReached } = arrival.value
+        work = sumOfWork(work, arrival.value.work)
+        for (let i = 0; i < outputsReached; i++) {
+          const τ = wanted[i] as number
+          states.push(stateAt(rows.subarray(i * state.length, (i + 1) * state.length), run, τ, τ, start))
+        }
+        state.set(arrival.value.state)
+        step = nextStep
+        from = time
+        if (!event) break
+        const level = levelOf(moving, state)
+        stopped = due(time, state) <= Math.min(near, level)
+        if (stopped) break
+        // An event inside a step of many ages is met only nearly: step on to it from there.
+        const rest = level <= near ? moving.find((one) => one.level(state) === level) : undefined
+        control = { ...control, firstStep: 0 }
+        if (rest === undefined) {
+          near *= 10
+          if (!(near < 1e30)) return failed({ kind: 'step-too-small', time, reached: { time, state } })
+          continue
+        }
+        rest.settle(state)
+        resting.push(rest)
+        moving = moving.filter(({ components }) => components[0] !== rest.components[0])
+        if (rest.components[0] === 0) due = never
       }
-      state.set(arrival.value.state)
-      const elapsed = event || time < endOfTime ? time : length
+      const elapsed = stopped || from < end ? from : length
       settle(run, elapsed)
-      step = nextStep
-      return success({ elapsed, stopped: event, outputs: states })
+      return success({ elapsed, stopped, outputs: states })
     },
+  }
+
+  /** A problem that turns stiff after the automatic choice was made is taken up again, implicitly. */
+  function passed(problem: Problem, control: Control): ReturnType<Integrator['run']> {
+    if (control.method !== 'automatic') return integrator.run(problem, control)
+    const patient = Math.min(patience, control.maxSteps)
+    const arrival = integrator.run(problem, { ...control, maxSteps: patient })
+    if (arrival.ok) return arrival
+    const { firstStep: _, ...rest } = control
+    return integrator.run(problem, { ...rest, method: 'implicit', maxSteps: control.maxSteps - patient + 1 })
   }
 
   /** Moves the surroundings to the end of a run. */
@@ -191,3 +246,12 @@ function odeMover(
     }
   }
 }
+
+const never = (): number => Number.POSITIVE_INFINITY
+
+const sumOfWork = (a: Work, b: Work): Work => ({
+  stepsAccepted: a.stepsAccepted + b.stepsAccepted,
+  stepsRejected: a.stepsRejected + b.stepsRejected,
+  rateEvaluations: a.rateEvaluations + b.rateEvaluations,
+  jacobians: a.jacobians + b.jacobians,
+})
