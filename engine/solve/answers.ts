@@ -71,11 +71,10 @@ export function killStepOf(scenario: Scenario, run: BatchRun): KillStep | undefi
   const first = kills[0]
   const last = kills[kills.length - 1]
   if (!first || !last || !(first.enzymeFrom > 0)) return undefined
-  // Below 1e-300 a double has nothing left to divide.
-  const left = Math.max(last.enzymeTo, 1e-300 * first.enzymeFrom)
   return {
     residualActivity: last.enzymeTo / run.dosed,
-    logReduction: -Math.log10(left / first.enzymeFrom),
+    // A share below 1e-300 is nothing to a double.
+    logReduction: -Math.log10(Math.max(last.enzymeTo / first.enzymeFrom, 1e-300)),
   }
 }
 

@@ -1,6 +1,7 @@
 /** The hold temperature at which a batch is done soonest, or comes furthest in a given time. */
 import { type Minimum, minimum } from '../numeric/minimum.ts'
 import type { Scenario } from '../scenario.ts'
+import { odeRoute } from './ode-route.ts'
 import { timeTo } from './reach.ts'
 import type { Route } from './route.ts'
 import { supplyUntil } from './separation.ts'
@@ -18,6 +19,33 @@ export type Aim = { readonly conversion: number } | { readonly within: number }
  */
 export function bestTemperature(scenario: Scenario, aim: Aim, low: number, high: number): Minimum | null {
   return minimum((T) => badness(solverOf(atHoldTemperature(scenario, T)), aim), low, high)
+}
+
+/** What a remedy is searched with where only steps tell: many runs, each good to a hundredth of a per cent. */
+const searching = { tolerance: 1e-5, method: 'automatic', maxSteps: 20_000 } as const
+
+/**
+ * A hold temperature between two bounds, K, at which a conversion is reached soon: the best one as a remedy needs
+ * it, to a tenth of a kelvin or so.
+ */
+export function goodTemperature(
+  scenario: Scenario,
+  conversion: number,
+  low: number,
+  high: number,
+): number | null {
+  const found = minimum(
+    (T) => {
+      const solver = solverOf(atHoldTemperature(scenario, T))
+      const aim = { conversion }
+      return solver.separable ? badness(solver, aim) : byRoute(odeRoute(solver.batch, searching), solver, aim)
+    },
+    low,
+    high,
+    48,
+    1e-3,
+  )
+  return found ? found.at : null
 }
 
 /** How the checking route sees the optimum: sought in a narrow window around the answer, K. */

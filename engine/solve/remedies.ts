@@ -2,7 +2,7 @@
 import type { Remedy } from '../answer.ts'
 import type { Phase, Scenario } from '../scenario.ts'
 import { type Mass, quantity, type Temperature, type Time } from '../units/quantity.ts'
-import { bestTemperature } from './best-temperature.ts'
+import { goodTemperature } from './best-temperature.ts'
 import { doseScaleFor, leastDoseScale } from './dose.ts'
 import { equilibriumBefore } from './equilibrium.ts'
 import { timeTo } from './reach.ts'
@@ -69,13 +69,13 @@ export function reachabilityRemedies(scenario: Scenario, solver: Solver, convers
     if (staged) consider(staged)
   }
   const hold = holdTemperature(scenario.programme)
-  const best = bestTemperature(scenario, { conversion }, Math.max(1, hold - 40), hold + 20)
-  if (best) {
-    const temperature = quantity<Temperature>(best.at)
+  const better = goodTemperature(scenario, conversion, Math.max(1, hold - 40), hold + 20)
+  if (better !== null) {
+    const temperature = quantity<Temperature>(better)
     consider({
-      kind: best.at < hold ? 'cooler' : 'warmer',
+      kind: better < hold ? 'cooler' : 'warmer',
       temperature,
-      time: quantity<Time>(Math.exp(best.value)),
+      time: quantity<Time>(timeTo(solverOf(atHoldTemperature(scenario, temperature)), conversion)),
     })
   }
   if (scenario.programme.kind === 'phases') {
