@@ -8,10 +8,10 @@ import type { Control, MethodChoice, Problem } from '../integrate/problem.ts'
 import { failed, success } from '../outcome.ts'
 import { logRates, type Surroundings } from './log-rates.ts'
 import { type Mover, march } from './march.ts'
-import { levelOf, type Rest, restsOf, stillOf } from './rest.ts'
+import { levelOf, logUnseen, type Rest, restsOf, stillOf } from './rest.ts'
 import type { Batch, BatchState, Route } from './route.ts'
 import { temperatureAt } from './temperature-course.ts'
-import type { Run } from './timeline.ts'
+import type { FeedRun, Run } from './timeline.ts'
 
 export interface Exactness {
   /** Relative error of substrate and enzyme that a step may add. */
@@ -139,6 +139,7 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
         settle(run, length)
         return success({ elapsed: length, stopped: false, outputs: states })
       }
+      if (run.feed) wake(run.feed, fedAfter(run, Math.min(length, endOfTime)))
       const end = Math.min(length, endOfTime)
       const substrateFed = run.feed?.substrate ?? 0
       const supplied = charged + fedSubstrate
@@ -211,6 +212,23 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
       settle(run, elapsed)
       return success({ elapsed, stopped, outputs: states })
     },
+  }
+
+  /**
+   * A feed into next to nothing: a logarithm without bottom is lifted to what rounds away beside the amount fed,
+   * or its rate, fed over present, would be out of all bounds.
+   */
+  function wake(feed: FeedRun, fed: number): void {
+    const lift = (i: number, amount: number): void => {
+      state[i] = Math.max(state[i] as number, Math.log(amount) + logUnseen)
+    }
+    const share = slow?.share ?? 0
+    lift(0, fed * feed.substrate * (1 - share))
+    if (slow) lift(1, fed * feed.substrate * share)
+    lift(enzymeAt, fed * feed.enzyme)
+    // What comes in may change everything at once; the last step says nothing of it.
+    step = undefined
+    if (series && feed.enzyme > 0) lift(enzymeAt + 1, 1)
   }
 
   /** A problem that turns stiff after the automatic choice was made is taken up again, implicitly. */

@@ -20,7 +20,7 @@ export interface Rest {
 /** Logarithm of the share of the charge below which substrate counts as spent; within reach of a double. */
 const logSpent = -575
 /** Logarithm of a share that a double does not see beside 1. */
-const logUnseen = -41
+export const logUnseen = -41
 /** Logarithm of an amount that is 0 in a double. */
 const logNothing = -746
 
