@@ -26,7 +26,7 @@ export function checkOf(solver: Solver, answer: number, other: number | null): C
 }
 
 /** Stepping knows the substrate, not what little of it was converted; below this the difference is of this. */
-const leastConversion = 1e-3
+const leastConversion = 0.1
 
 /** Compares two conversions that should be one. */
 export function checkOfConversion(solver: Solver, answer: number, other: number | null): Check {
@@ -71,11 +71,10 @@ export function killStepOf(scenario: Scenario, run: BatchRun): KillStep | undefi
   const first = kills[0]
   const last = kills[kills.length - 1]
   if (!first || !last || !(first.enzymeFrom > 0)) return undefined
-  return {
-    residualActivity: last.enzymeTo / run.dosed,
-    // A share below 1e-300 is nothing to a double.
-    logReduction: -Math.log10(Math.max(last.enzymeTo / first.enzymeFrom, 1e-300)),
-  }
+  const residualActivity = last.enzymeTo / run.dosed
+  // A share below 1e-300 is nothing to a double.
+  const logReduction = -Math.log10(Math.max(last.enzymeTo / first.enzymeFrom, 1e-300))
+  return Number.isFinite(residualActivity + logReduction) ? { residualActivity, logReduction } : undefined
 }
 
 /** Work of several runs together. */

@@ -1,9 +1,10 @@
 /** The hold temperature at which a batch is done soonest, or comes furthest in a given time. */
 import { type Minimum, minimum } from '../numeric/minimum.ts'
+import { failed, type Outcome, success } from '../outcome.ts'
 import type { Scenario } from '../scenario.ts'
+import { type Budget, budget, overspent, stepsOf } from './budget.ts'
 import { odeRoute } from './ode-route.ts'
-import { timeTo } from './reach.ts'
-import type { Route } from './route.ts'
+import type { Route, RouteFailure } from './route.ts'
 import { supplyUntil } from './separation.ts'
 import { type Solver, solverOf } from './solver.ts'
 import { atHoldTemperature } from './variants.ts'
@@ -16,9 +17,18 @@ export type Aim = { readonly conversion: number } | { readonly within: number }
  *
  * Shapes   null where the aim is met at no temperature between them. `value` is ln of the time, or a measure that
  *          falls as the conversion rises.
+ * Fails    too-many-steps where the search would take too long.
  */
-export function bestTemperature(scenario: Scenario, aim: Aim, low: number, high: number): Minimum | null {
-  return minimum((T) => badness(solverOf(atHoldTemperature(scenario, T)), aim), low, high)
+export function bestTemperature(
+  scenario: Scenario,
+  aim: Aim,
+  low: number,
+  high: number,
+): Outcome<Minimum | null, RouteFailure> {
+  const steps = 300_000
+  const spend = budget(steps)
+  const best = minimum((T) => badness(solverOf(atHoldTemperature(scenario, T)), aim, spend), low, high)
+  return spend.left > 0 ? success(best) : failed(overspent(steps))
 }
 
 /** What a remedy is searched with where only steps tell: many runs, each good to a hundredth of a per cent. */
@@ -34,11 +44,14 @@ export function goodTemperature(
   low: number,
   high: number,
 ): number | null {
+  const spend = budget(100_000)
   const found = minimum(
     (T) => {
       const solver = solverOf(atHoldTemperature(scenario, T))
       const aim = { conversion }
-      return solver.separable ? badness(solver, aim) : byRoute(odeRoute(solver.batch, searching), solver, aim)
+      return solver.separable
+        ? badness(solver, aim, spend)
+        : byRoute(odeRoute(solver.batch, searching), solver, aim, spend)
     },
     low,
     high,
@@ -59,10 +72,11 @@ export function checkedTemperature(
   const half = Math.min(2, Math.max(0.05, 0.25 * (high - low)))
   const from = Math.max(low, near - half)
   const to = Math.min(high, near + half)
+  const spend = budget(300_000)
   const found = minimum(
     (T) => {
       const solver = solverOf(atHoldTemperature(scenario, T))
-      return byRoute(solver.checks, solver, aim)
+      return byRoute(solver.checks, solver, aim, spend)
     },
     from,
     to,
@@ -72,27 +86,30 @@ export function checkedTemperature(
   return found && (!found.atBound || found.at === low || found.at === high) ? found.at : null
 }
 
-function badness(solver: Solver, aim: Aim): number {
-  if ('conversion' in aim) return finiteLog(timeTo(solver, aim.conversion))
+function badness(solver: Solver, aim: Aim, spend: Budget): number {
   const conditional = solver.batch.timeline.steps.some(
     (step) => step.kind === 'run' && step.until !== undefined,
   )
-  if (solver.separable && !conditional) {
+  if ('within' in aim && solver.separable && !conditional) {
     // The supply has its optimum where the conversion has, and keeps its digits when nearly all is converted.
     const supply = supplyUntil(solver.batch, solver.firstDoseAt + aim.within, false)
     return supply.ok ? -finiteLog(supply.value) : Number.POSITIVE_INFINITY
   }
-  return byRoute(solver.answers, solver, aim)
+  return byRoute(solver.answers, solver, aim, spend)
 }
 
-function byRoute(route: Route, solver: Solver, aim: Aim): number {
-  if ('conversion' in aim) {
-    const run = route({ doseScale: 1, target: aim.conversion, endless: false })
-    if (!run.ok || run.value.reachedAt === undefined) return Number.POSITIVE_INFINITY
-    return finiteLog(run.value.reachedAt - run.value.firstDoseAt)
-  }
-  const run = route({ doseScale: 1, until: solver.firstDoseAt + aim.within, endless: false })
-  return run.ok ? finiteLog(run.value.end.substrate * run.value.end.volume) : Number.POSITIVE_INFINITY
+function byRoute(route: Route, solver: Solver, aim: Aim, spend: Budget): number {
+  if (spend.left <= 0) return Number.POSITIVE_INFINITY
+  const run = route({
+    doseScale: 1,
+    endless: false,
+    ...('conversion' in aim ? { target: aim.conversion } : { until: solver.firstDoseAt + aim.within }),
+  })
+  spend.left -= stepsOf(run)
+  if (!run.ok) return Number.POSITIVE_INFINITY
+  const { reachedAt, firstDoseAt, end } = run.value
+  if ('within' in aim) return finiteLog(end.substrate * end.volume)
+  return reachedAt === undefined ? Number.POSITIVE_INFINITY : finiteLog(reachedAt - firstDoseAt)
 }
 
 const finiteLog = (x: number): number =>

@@ -1,97 +1,235 @@
 /**
- * Enzyme-time supplied while the temperature moves: ∫k(T)·E dt with E falling by ∫kd(T) dt, by Gauss–Legendre in
- * cells short enough that neither rate constant nor the enzyme changes much within one.
+ * Enzyme-time supplied while the temperature moves: ∫k(T)·E dt with E falling by ∫kd(T) dt, both integrated by
+ * collocation at Gauss–Legendre nodes, in cells short enough that neither rate constant nor the enzyme changes much
+ * within one.
  *
- * Source   composite Gauss–Legendre; the inner integral of kd is carried from node to node by a 4-point rule.
+ * Source   composite Gauss–Legendre; the inner integral by the interpolant through the same nodes.
  */
-import { gauss4, gauss8 } from '../numeric/gauss-legendre.ts'
+import {
+  integrateToNodesInto,
+  integrateWhole,
+  legendreCoefficientsInto,
+  order,
+  type SeriesPoint,
+  seriesAtInto,
+} from '../numeric/collocation.ts'
+import { gauss16 } from '../numeric/gauss-legendre.ts'
 import type { EnzymeModel } from './enzyme-model.ts'
 import { type TemperatureCourse, temperatureAt, timeAtTemperature } from './temperature-course.ts'
 
-/** Change of ln k or ln kd within a cell that leaves 8 nodes at round-off. */
-const cellSpan = 1.4
-/** Enzyme lost within a cell, in e-folds, that leaves 8 nodes at round-off. */
-const cellLoss = 2.5
+const { nodes } = gauss16
+
+/** Change of ln k or ln kd within a cell whose 16 nodes keep the running integral at 1e-11 of itself. */
+const cellSpan = 6
+/** Enzyme lost within a cell, in e-folds, that keeps it there. */
+const cellLoss = 2
 /** Past this many e-folds what is still supplied is below the last digit of what was. */
 const spent = 45
 
 /** The rate constants of one pH as functions of temperature. */
 export interface RateConstantsOfTemperature {
   readonly k: (T: number) => number
-  readonly k1?: (T: number) => number
+  readonly k1: ((T: number) => number) | undefined
 }
 
-/** A stretch of a course: enzyme-time and loss (∫kd dt) since its start, filled in place. */
-export interface Stretch {
-  supplied: number
-  loss: number
+/** Room for one course at a time, to be used again and again. */
+export interface CourseWorkspace {
+  readonly loss: Float64Array
+  readonly running: Float64Array
+  readonly rate: Float64Array
+  readonly rateSeries: Float64Array
+  readonly lossSeries: Float64Array
+  readonly point: SeriesPoint
 }
 
-/** One cell from a to b added to a stretch, for one unit of enzyme at the course's start. */
-export function addCell(
-  { k, k1 }: RateConstantsOfTemperature,
-  course: TemperatureCourse,
-  a: number,
-  b: number,
-  stretch: Stretch,
-): void {
-  const width = b - a
-  let loss = stretch.loss
-  let sum = 0
-  let at = a
-  for (let i = 0; i < 8; i++) {
-    const node = a + width * (gauss8.nodes[i] as number)
-    if (k1) loss += lossBetween(k1, course, at, node)
-    at = node
-    sum += (gauss8.weights[i] as number) * k(temperatureAt(course, node)) * Math.exp(-loss)
+/** Makes the room that a `CourseSupply` works in. */
+export const courseWorkspace = (): CourseWorkspace => ({
+  loss: new Float64Array(order),
+  running: new Float64Array(order),
+  rate: new Float64Array(order),
+  rateSeries: new Float64Array(order),
+  lossSeries: new Float64Array(order),
+  point: { integral: 0, value: 0 },
+})
+
+/** The supply of one course for one unit of enzyme at its start, made cell by cell as far as it is asked. */
+export class CourseSupply {
+  private readonly constants: RateConstantsOfTemperature
+  private readonly course: TemperatureCourse
+  private readonly length: number
+  private readonly cells: number
+  private readonly temperatureStep: number
+  /** The present cell: its number, ends, and what had been supplied and lost before it. */
+  private cell = -1
+  private cellEnd = 0
+  private from = 0
+  private to = 0
+  private suppliedBefore = 0
+  private lostBefore = 0
+  private suppliedWithin = 0
+  private lostWithin = 0
+  private fresh = false
+  private readonly room: CourseWorkspace
+
+  constructor(
+    constants: RateConstantsOfTemperature,
+    steepness: EnzymeModel['steepness'],
+    course: TemperatureCourse,
+    length: number,
+    room: CourseWorkspace,
+  ) {
+    this.room = room
+    this.constants = constants
+    this.course = course
+    this.length = length
+    const from = course.from
+    const to = temperatureAt(course, length)
+    const steepest = Math.max(steepness.rate, steepness.inactivation)
+    const span = (steepest * Math.abs(to - from)) / (from * to)
+    this.cells = Math.min(4000, Math.max(1, Math.ceil(span / cellSpan)))
+    this.temperatureStep = (to - from) / this.cells
+    this.next()
   }
-  if (k1) loss += lossBetween(k1, course, at, b)
-  stretch.supplied += width * sum
-  stretch.loss = loss
-}
 
-function lossBetween(k1: (T: number) => number, course: TemperatureCourse, from: number, to: number): number {
-  const width = to - from
-  let sum = 0
-  for (let i = 0; i < 4; i++)
-    sum +=
-      (gauss4.weights[i] as number) * k1(temperatureAt(course, from + width * (gauss4.nodes[i] as number)))
-  return width * sum
-}
+  /** Supplied up to τ, s. */
+  suppliedUntil(τ: number): number {
+    this.seek(τ)
+    return this.suppliedBefore + this.within(this.room.rateSeries, τ)
+  }
 
-/**
- * The ends of the cells that a course needs up to `length`, ascending, the first after 0.
- *
- * Shapes   equal steps of temperature, each cut further where the enzyme would be lost within it.
- */
-export function cellEnds(
-  { k1 }: RateConstantsOfTemperature,
-  steepness: EnzymeModel['steepness'],
-  course: TemperatureCourse,
-  length: number,
-): number[] {
-  const from = course.from
-  const to = temperatureAt(course, length)
-  const coolest = Math.min(from, to)
-  const steepest = Math.max(steepness.rate, steepness.inactivation)
-  const span = (steepest * Math.abs(to - from)) / (coolest * Math.max(from, to))
-  const cells = Math.min(4000, Math.max(1, Math.ceil(span / cellSpan)))
-  const ends: number[] = []
-  let a = 0
-  let loss = 0
-  for (let i = 1; i <= cells; i++) {
-    const b =
-      i === cells ? length : Math.min(length, timeAtTemperature(course, from + ((to - from) * i) / cells))
-    if (k1 && loss < spent) {
-      const before = k1(temperatureAt(course, a))
-      const after = k1(temperatureAt(course, b))
-      const fastest = Math.max(before, after)
-      const cuts = Math.min(64, Math.ceil((fastest * (b - a)) / cellLoss))
-      for (let j = 1; j < cuts; j++) ends.push(a + ((b - a) * j) / cuts)
-      loss += 0.5 * (before + after) * (b - a)
+  /** ∫kd dt up to τ: the enzyme left is e to its negative. */
+  lostUntil(τ: number): number {
+    if (!this.constants.k1) return 0
+    this.seek(τ)
+    return this.lostBefore + this.within(this.room.lossSeries, τ)
+  }
+
+  /** Supplied over the whole length. */
+  supplied(): number {
+    while (this.next());
+    return this.suppliedBefore + this.suppliedWithin
+  }
+
+  /** ∫kd dt over the whole length. */
+  lost(): number {
+    while (this.next());
+    return this.lostBefore + this.lostWithin
+  }
+
+  /** Time at which `amount` has been supplied; null where the course ends before. */
+  timeFor(amount: number): number | null {
+    while (this.suppliedBefore + this.suppliedWithin < amount) if (!this.next()) return null
+    if (!(this.suppliedWithin > 0)) return this.from
+    this.prepareSeries()
+    const due = (amount - this.suppliedBefore) / this.width()
+    let low = 0
+    let high = 1
+    let x = (amount - this.suppliedBefore) / this.suppliedWithin
+    const { point, rateSeries } = this.room
+    for (let i = 0; i < 60; i++) {
+      seriesAtInto(point, rateSeries, x)
+      const surplus = point.integral - due
+      if (surplus < 0) low = x
+      else high = x
+      let better = x - surplus / point.value
+      if (!(better >= low && better <= high)) better = 0.5 * (low + high)
+      const step = Math.abs(better - x)
+      x = better
+      if (step < 1e-15) break
     }
-    ends.push(b)
-    a = b
+    return this.from + x * this.width()
   }
-  return ends
+
+  private width(): number {
+    return this.to - this.from
+  }
+
+  /** Integral of a series over the present cell up to τ. */
+  private within(series: Float64Array, τ: number): number {
+    if (!(this.to > this.from)) return 0
+    const { point } = this.room
+    seriesAtInto(point, series, Math.min(1, Math.max(0, (τ - this.from) / this.width())))
+    return this.width() * point.integral
+  }
+
+  /** Goes on to the cell that holds τ; earlier cells are not kept, so τ never goes back. */
+  private seek(τ: number): void {
+    while (this.to < τ && this.next());
+    this.prepareSeries()
+  }
+
+  private prepareSeries(): void {
+    if (this.fresh) return
+    this.fresh = true
+    legendreCoefficientsInto(this.room.rateSeries, this.room.rate)
+    if (this.constants.k1) legendreCoefficientsInto(this.room.lossSeries, this.room.loss)
+  }
+
+  /** Takes up the next cell or the next piece of it; false at the end of the course. */
+  private next(): boolean {
+    if (!(this.to < this.cellEnd)) {
+      if (this.cell + 1 >= this.cells) return false
+      this.cell++
+      const { course, cells, cell, length } = this
+      this.cellEnd =
+        cell + 1 === cells
+          ? length
+          : Math.min(length, timeAtTemperature(course, course.from + this.temperatureStep * (cell + 1)))
+    }
+    this.suppliedBefore += this.suppliedWithin
+    this.lostBefore += this.lostWithin
+    this.from = this.to
+    this.to = this.pieceEnd(this.from, this.cellEnd)
+    this.fill()
+    return true
+  }
+
+  /** How far a piece of a cell may go so that the enzyme does not die within it. */
+  private pieceEnd(from: number, end: number): number {
+    const { k1 } = this.constants
+    if (!k1 || this.lostBefore > spent) return end
+    const before = k1(temperatureAt(this.course, from))
+    let to = end
+    for (;;) {
+      const loss = Math.max(before, k1(temperatureAt(this.course, to))) * (to - from)
+      if (!(loss > cellLoss)) return to
+      const shorter = from + (to - from) * Math.max(0.125, cellLoss / loss)
+      if (!(shorter > from && shorter < to)) return to
+      to = shorter
+    }
+  }
+
+  private fill(): void {
+    const { course } = this
+    const { loss, rate, running } = this.room
+    const { k, k1 } = this.constants
+    const width = this.width()
+    this.fresh = false
+    const linear = course.kind === 'linear'
+    const slope = linear ? course.slope : 0
+    if (!k1) {
+      for (let i = 0; i < order; i++) {
+        const τ = this.from + width * (nodes[i] as number)
+        rate[i] = k(linear ? course.from + slope * τ : temperatureAt(course, τ))
+      }
+    } else {
+      for (let i = 0; i < order; i++) {
+        const τ = this.from + width * (nodes[i] as number)
+        const T = linear ? course.from + slope * τ : temperatureAt(course, τ)
+        loss[i] = k1(T)
+        rate[i] = k(T)
+      }
+      integrateToNodesInto(running, loss)
+      for (let i = 0; i < order; i++)
+        rate[i] = (rate[i] as number) * left(this.lostBefore + width * (running[i] as number))
+      this.lostWithin = width * integrateWhole(loss)
+    }
+    this.suppliedWithin = width * integrateWhole(rate)
+  }
 }
+
+/** e^(−loss), by its series where hardly anything is lost yet: most of a heat-up, and much cheaper there. */
+const left = (loss: number): number =>
+  loss > 0.03
+    ? Math.exp(-loss)
+    : 1 - loss * (1 - (loss / 2) * (1 - (loss / 3) * (1 - (loss / 4) * (1 - (loss / 5) * (1 - loss / 6)))))

@@ -1,6 +1,7 @@
 /** The dose: for a time, and the least one with which a target is reached at all. */
 import { bracketedRoot } from '../numeric/roots.ts'
 import { failed, type Outcome, success } from '../outcome.ts'
+import { budget, overspent, stepsOf } from './budget.ts'
 import { equilibriumBefore } from './equilibrium.ts'
 import type { Route, RouteFailure } from './route.ts'
 import { pathOf, supplyUntil } from './separation.ts'
@@ -53,8 +54,13 @@ function searchScale(
 ): Outcome<DoseScale, RouteFailure> {
   let failure: RouteFailure | undefined
   let highest = 0
+  const steps = 500_000
+  const spend = budget(steps)
   const short = (logScale: number): number => {
+    if (failure) return Number.NaN
     const run = route({ doseScale: Math.exp(logScale), until, endless })
+    spend.left -= stepsOf(run)
+    if (spend.left < 0) failure = overspent(steps)
     if (!run.ok) {
       failure ??= run.failure
       return Number.NaN

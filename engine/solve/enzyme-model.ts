@@ -3,14 +3,16 @@ import { activityPerMass, specificRateFromActivity } from '../kinetics/activity.
 import { gasConstant } from '../kinetics/gas-constant.ts'
 import { EaFromZ, kdFromD, kdFromHalfLife } from '../kinetics/heat-resistance.ts'
 import { massYieldOf } from '../kinetics/hydrolysis-gain.ts'
-import { bell, bellOptimum } from '../kinetics/ph-bell.ts'
-import { kmFactor, limitingRateFactor } from '../kinetics/ph-full.ts'
-import { phInactivationFactor } from '../kinetics/ph-inactivation.ts'
+import { bellOptimum } from '../kinetics/ph-bell.ts'
 import { EaFromQ10 } from '../kinetics/q10.ts'
 import type { RateConstants } from '../kinetics/rate-law.ts'
 import { activeShare } from '../kinetics/reversible-loss.ts'
 import type { Conditions, Enzyme, EnzymeRate, Feed, InactivationStep, PhEffect } from '../scenario.ts'
 import { type MolarEnergy, quantity, type SpecificRate, type Temperature } from '../units/quantity.ts'
+import { ionisationRatio } from './ionisation-ratio.ts'
+
+/** No constant is let above this, 1/s: products with amounts and times stay within the range of doubles. */
+const greatest = 1e200
 
 export interface EnzymeModel {
   /** At one pH, k of temperature: kg of substrate per kg of preparation and s. */
@@ -45,14 +47,13 @@ export function enzymeModel(enzyme: Enzyme, feed: Feed): EnzymeModel {
   const Tref = at.temperature
   const loss = temperature.reversibleLoss
   const lossRef = loss ? activeShare(loss.half, loss.energy, Tref) : 1
-  const kNorm = kRef / ((phEffect && at.pH !== undefined ? rateFactor(phEffect, at.pH) : 1) * lossRef)
+  const kNorm = kRef / lossRef
   const k = (pH: number | undefined) => {
-    const kHere = phEffect && pH !== undefined ? kNorm * rateFactor(phEffect, pH) : kNorm
-    if (!loss) return (T: number): number => kHere * Math.exp((ea * (T - Tref)) / (T * Tref))
-    return (T: number): number =>
-      kHere *
-      Math.exp((ea * (T - Tref)) / (T * Tref)) *
-      activeShare(loss.half, loss.energy, quantity<Temperature>(T))
+    const followed = phEffect && pH !== undefined && at.pH !== undefined
+    const kHere = followed ? kNorm * rateRatio(phEffect, at.pH, pH) : kNorm
+    const arrhenius = rateConstant(kHere, ea, Tref)
+    if (!loss) return arrhenius
+    return (T: number): number => arrhenius(T) * activeShare(loss.half, loss.energy, quantity<Temperature>(T))
   }
   const constants: RateConstants = {
     Km: rate.Km,
@@ -66,7 +67,7 @@ export function enzymeModel(enzyme: Enzyme, feed: Feed): EnzymeModel {
     full && pH !== undefined && at.pH !== undefined
       ? {
           ...constants,
-          Km: (rate.Km * kmFactor(full.free, full.complex, pH)) / kmFactor(full.free, full.complex, at.pH),
+          Km: rate.Km * ionisationRatio(full.free, pH, at.pH) * ionisationRatio(full.complex, at.pH, pH),
         }
       : constants
   const inactivation = enzyme.inactivation && inactivationModel(enzyme.inactivation)
@@ -109,8 +110,21 @@ function specificRate(enzyme: Enzyme, feed: Feed): SpecificRate {
   return specificRateFromActivity(perMass, molarMass, Km, assay.substrate)
 }
 
-const rateFactor = (effect: PhEffect, pH: number): number =>
-  'free' in effect ? limitingRateFactor(effect.complex, pH) : bell(effect, pH)
+/** Rate at a pH over the one at the pH of measurement. */
+const rateRatio = (effect: PhEffect, measured: number, pH: number): number =>
+  ionisationRatio('free' in effect ? effect.complex : effect, measured, pH)
+
+/** The rate constant as a function of temperature: Arrhenius' law, kept within the range of doubles. */
+function rateConstant(k: number, energyOverR: number, at: number): (T: number) => number {
+  if (!(k > 0)) return () => 0
+  if (energyOverR === 0) return () => Math.min(k, greatest)
+  return (T) => {
+    const value = k * Math.exp((energyOverR * (T - at)) / (T * at))
+    if (value <= greatest) return value
+    const exponent = Math.log(k) + (energyOverR * ((T - at) / T)) / at
+    return exponent < Math.log(greatest) ? Math.exp(exponent) : greatest
+  }
+}
 
 function massYieldOfFeed({ substrate, product }: Feed): number {
   if (product.massYield !== undefined) return product.massYield
@@ -128,10 +142,8 @@ function inactivationModel(stated: NonNullable<Enzyme['inactivation']>): {
   const effect = stated.pH
   const withPh =
     ({ kd, ed, at }: { kd: number; ed: number; at: number }) =>
-    (pH: number | undefined) => {
-      const kHere = effect && pH !== undefined ? kd * phInactivationFactor(effect, pH) : kd
-      return (T: number): number => kHere * Math.exp((ed * (T - at)) / (T * at))
-    }
+    (pH: number | undefined) =>
+      rateConstant(effect && pH !== undefined ? kd * ionisationRatio(effect, pH, effect.at) : kd, ed, at)
   const one = stepConstants(first)
   const two = second && stepConstants(second)
   return {

@@ -27,7 +27,9 @@ const agreement = 3e-5
 export function findTemperature(scenario: Scenario, ask: TemperatureAsk): Outcome<AnswerBody, RouteFailure> {
   const [low, high] = ask.between
   const aim = ask.best === 'time' ? { conversion: ask.conversion } : { within: ask.within }
-  const best = bestTemperature(scenario, aim, low, high)
+  const found = bestTemperature(scenario, aim, low, high)
+  if (!found.ok) return failed(found.failure)
+  const best = found.value
   if (!best) return never(scenario, ask.best === 'time' ? ask.conversion : 0, low, high)
   const temperature = quantity<Temperature>(best.at)
   const chosen = atHoldTemperature(scenario, temperature)

@@ -3,20 +3,21 @@
  * v_slow = ρ·k·E·L/D with one denominator D over both, so that L = L0·(F/F0)^ρ and u = ln(F0/F).
  *
  * Source   competition of two substrates for one enzyme (Cornish-Bowden, Fundamentals of Enzyme Kinetics), equal
- *          Km; no closed form of the enzyme-time: Gauss–Legendre in u.
+ *          Km; the enzyme-time is a sum of exponentials in u, integrated term by term.
  */
+import { excess } from '../kinetics/decay.ts'
 import type { Charge } from '../kinetics/integrated-rate-law.ts'
 import { type RateConstants, resistance } from '../kinetics/rate-law.ts'
-import { gauss16, integral } from '../numeric/gauss-legendre.ts'
 import { increasingRoot } from '../numeric/roots.ts'
 import type { ReactionPath, SlowFraction } from './reaction-path.ts'
 
-/** Panels this wide in the fast exponential keep 16 nodes at round-off. */
-const panel = 4
+/** ∫_0^u e^(−a·u) du */
+const decayed = (a: number, u: number): number => -Math.expm1(-a * u) / a
 
 /** The path of a charge with a slow fraction. */
 export function fractionPath(law: RateConstants, charge: Charge, slow: SlowFraction): ReactionPath {
   const { S0, P0, massYield } = charge
+  const { Km, Kic, Kiu, Ksi } = law
   const slow0 = slow.share * S0
   const fast0 = S0 - slow0
   const { relativeRate } = slow
@@ -24,16 +25,19 @@ export function fractionPath(law: RateConstants, charge: Charge, slow: SlowFract
   const consumed = (u: number): number => -fast0 * Math.expm1(-u) - slow0 * Math.expm1(-relativeRate * u)
   const demandSlope = (u: number): number => resistance(law, substrate(u), P0 + massYield * consumed(u))
   const demand = (u: number): number => {
-    let sum = 0
-    let low = 0
-    while (low < u) {
-      const width = low < 10 * panel ? panel : panel / relativeRate
-      const high = Math.min(u, low + width)
-      sum += integral(demandSlope, low, high, gauss16)
-      // Past forty time constants of the slow fraction nothing but Km and the product is left.
-      if (relativeRate * high > 40 && high > 40) return sum + (u - high) * demandSlope(high)
-      low = high
+    const first = fast0 * decayed(1, u) + slow0 * decayed(relativeRate, u)
+    let sum = Km * u + first
+    if (Kic !== undefined) {
+      const consumedTime = fast0 * excess(u) + (slow0 * excess(relativeRate * u)) / relativeRate
+      sum += (Km / Kic) * (P0 * u + massYield * consumedTime)
     }
+    if (Kiu === undefined && Ksi === undefined) return sum
+    const second =
+      fast0 * fast0 * decayed(2, u) +
+      2 * fast0 * slow0 * decayed(1 + relativeRate, u) +
+      slow0 * slow0 * decayed(2 * relativeRate, u)
+    if (Kiu !== undefined) sum += (P0 * first + massYield * (S0 * first - second)) / Kiu
+    if (Ksi !== undefined) sum += second / Ksi
     return sum
   }
   const coordinate = (conversion: number): number | null => {

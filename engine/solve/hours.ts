@@ -30,7 +30,7 @@ const avoidable: ReadonlySet<HoursCause> = new Set([
  * The ledger of a batch that reached its target.
  *
  * Shapes   undefined where a comparison batch never gets there (the real programme is saved by what the ledger
- *          would take away).
+ *          would take away), or takes longer than a double holds.
  */
 export function hoursLedger(
   scenario: Scenario,
@@ -82,6 +82,7 @@ export function hoursLedger(
   line('enzyme-loss', atOnce - atSet)
   line('heating', time - steady)
   line('staging', steady - atOnce)
+  if (lines.some(({ time: t }) => !Number.isFinite(t))) return undefined
   const largest = lines
     .filter(({ cause, time: t }) => avoidable.has(cause) && t > 0.01 * time)
     .sort((a, b) => b.time - a.time)[0]

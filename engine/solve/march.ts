@@ -20,7 +20,8 @@ export interface Mover {
     stopAt: number | undefined,
     outputs: readonly number[],
   ) => Outcome<Advance, RouteFailure>
-  readonly conversion: () => number
+  /** Whether a conversion has been reached. */
+  readonly reached: (conversion: number) => boolean
   /** kg of active preparation */
   readonly activeEnzyme: () => number
   readonly state: (time: number, run: Run, elapsed: number) => BatchState
@@ -70,20 +71,14 @@ export function march(batch: Batch, mover: Mover, request: RunRequest): Outcome<
       dosed += mass
       continue
     }
-    if (target !== undefined && mover.conversion() >= target && !Number.isNaN(firstDoseAt))
-      return finish(time)
+    if (target !== undefined && !Number.isNaN(firstDoseAt) && mover.reached(target)) return finish(time)
     if (time >= until) break
     const length = Math.min(step.duration, until - time)
-    const stops = [target, step.until].filter((x) => x !== undefined)
-    const stopAt = stops.length ? Math.min(...stops) : undefined
+    const stopAt =
+      target === undefined || (step.until !== undefined && step.until < target) ? step.until : target
     const from = time
     const enzymeFrom = mover.activeEnzyme()
-    const due: number[] = []
-    for (const at of wanted.slice(outputs.length)) {
-      if (at - from > length - sameMoment && step !== timeline.after && length === step.duration) break
-      if (at - from > length + sameMoment) break
-      due.push(Math.min(length, Math.max(0, at - from)))
-    }
+    const due = outputs.length < wanted.length ? dueWithin(step, from, length) : none
     const passed = mover.advance(step, length, stopAt, due)
     if (!passed.ok) return failed(passed.failure)
     const { elapsed, stopped } = passed.value
@@ -97,8 +92,22 @@ export function march(batch: Batch, mover: Mover, request: RunRequest): Outcome<
     marks.push({ phase: step.phase, from, to: time, enzymeFrom, enzymeTo: mover.activeEnzyme() })
     if (stopped && target !== undefined && stopAt === target) return finish(time)
   }
-  if (target !== undefined && mover.conversion() >= target) return finish(time)
+  if (target !== undefined && mover.reached(target)) return finish(time)
   while (outputs.length < wanted.length && (wanted[outputs.length] as number) <= time + sameMoment)
     outputs.push(mover.state(wanted[outputs.length] as number, last, elapsedInLast))
   return finish()
+
+  /** Times wanted within a run, from its start; those at its very end belong to the next one. */
+  function dueWithin(run: Run, from: number, length: number): readonly number[] {
+    const due: number[] = []
+    const open = run !== timeline.after && length === run.duration
+    for (let i = outputs.length; i < wanted.length; i++) {
+      const at = (wanted[i] as number) - from
+      if (open ? at > length - sameMoment : at > length + sameMoment) break
+      due.push(Math.min(length, Math.max(0, at)))
+    }
+    return due
+  }
 }
+
+const none: readonly number[] = []

@@ -4,14 +4,16 @@
  */
 import type { Work } from '../answer.ts'
 import { createIntegrator, type Integrator } from '../integrate/integrator.ts'
-import type { Control, MethodChoice, Problem } from '../integrate/problem.ts'
+import type { Control, MethodChoice } from '../integrate/problem.ts'
 import { failed, success } from '../outcome.ts'
+import { type Approach, approachByReaction, approachInAmounts, type Stretch } from './approach.ts'
 import { logRates, type Surroundings } from './log-rates.ts'
 import { type Mover, march } from './march.ts'
-import { levelOf, logUnseen, type Rest, restsOf, stillOf } from './rest.ts'
+import { patientRun, sumOfWork } from './patient-run.ts'
+import { levelOf, liftForFeed, type Rest, restsOf, stillOf } from './rest.ts'
 import type { Batch, BatchState, Route } from './route.ts'
 import { temperatureAt } from './temperature-course.ts'
-import type { FeedRun, Run } from './timeline.ts'
+import type { Run } from './timeline.ts'
 
 export interface Exactness {
   /** Relative error of substrate and enzyme that a step may add. */
@@ -25,9 +27,6 @@ export const standardExactness: Exactness = { tolerance: 1e-8, method: 'automati
 
 /** Logarithms of any size keep this share of themselves: an enzyme e^(−1e9) has no digits to keep. */
 const logRoundOff = 1e-13
-
-/** Attempts after which the automatic choice of method is no longer trusted; ordinary batches take hundreds. */
-const patience = 20_000
 
 /** An event this near, in logarithms, has been met. */
 const located = 1e-9
@@ -126,7 +125,7 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
       if (timeline.countDoseVolume && preparationDensity !== undefined) volume += mass / preparationDensity
       step = undefined
     },
-    conversion: () => 1 - substrateIn(state) / (charged + fedSubstrate),
+    reached: (conversion) => 1 - substrateIn(state) / (charged + fedSubstrate) >= conversion,
     activeEnzyme: () => activeIn(state, totalEnzyme),
     state: (time, run, elapsed) => stateAt(state, run, elapsed, time, here(), 0),
     work: () => work,
@@ -139,8 +138,27 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
         settle(run, length)
         return success({ elapsed: length, stopped: false, outputs: states })
       }
-      if (run.feed) wake(run.feed, fedAfter(run, Math.min(length, endOfTime)))
+      if (run.feed) {
+        liftForFeed(batch, state, run.feed, fedAfter(run, Math.min(length, endOfTime)))
+        // What comes in may change everything at once; the last step says nothing of it.
+        step = undefined
+      }
       const end = Math.min(length, endOfTime)
+      let from = 0
+      if (outputs.length === 0 && !slow && !series && exactness.method !== 'implicit') {
+        const approach = approachTo(run, stopAt, end)
+        if (approach) {
+          work = sumOfWork(work, approach.work)
+          state[0] = (state[0] as number) + approach.lnSubstrate
+          state[1] = (state[1] as number) + approach.lnEnzyme
+          from = approach.elapsed
+          step = undefined
+          if (approach.end !== 'spent') {
+            settle(run, from)
+            return success({ elapsed: from, stopped: approach.end === 'target', outputs: noStates })
+          }
+        }
+      }
       const substrateFed = run.feed?.substrate ?? 0
       const supplied = charged + fedSubstrate
       let control: Control = {
@@ -160,15 +178,17 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
           ? never
           : (τ: number, y: ArrayLike<number>): number =>
               Math.log(substrateIn(y) / ((1 - stopAt) * (supplied + fedAfter(run, τ) * substrateFed)))
-      let from = 0
       const resting: Rest[] = []
       let moving = run.feed ? [] : restsOf(batch, run, start, supplied, exactness.tolerance)
       const states: BatchState[] = []
       let stopped = false
       let near = located
       for (;;) {
+        if (Number.isNaN(Math.min(due(from, state), levelOf(moving, state))))
+          return failed({ kind: 'rate-not-finite', time: from, component: 0, reached: { time: from, state } })
         const wanted = outputs.slice(states.length)
-        const arrival = passed(
+        const arrival = patientRun(
+          integrator,
           {
             rate: stillOf(rate, resting),
             start: from,
@@ -214,31 +234,25 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
     },
   }
 
-  /**
-   * A feed into next to nothing: a logarithm without bottom is lifted to what rounds away beside the amount fed,
-   * or its rate, fed over present, would be out of all bounds.
-   */
-  function wake(feed: FeedRun, fed: number): void {
-    const lift = (i: number, amount: number): void => {
-      state[i] = Math.max(state[i] as number, Math.log(amount) + logUnseen)
-    }
-    const share = slow?.share ?? 0
-    lift(0, fed * feed.substrate * (1 - share))
-    if (slow) lift(1, fed * feed.substrate * share)
-    lift(enzymeAt, fed * feed.enzyme)
-    // What comes in may change everything at once; the last step says nothing of it.
-    step = undefined
-    if (series && feed.enzyme > 0) lift(enzymeAt + 1, 1)
-  }
-
-  /** A problem that turns stiff after the automatic choice was made is taken up again, implicitly. */
-  function passed(problem: Problem, control: Control): ReturnType<Integrator['run']> {
-    if (control.method !== 'automatic') return integrator.run(problem, control)
-    const patient = Math.min(patience, control.maxSteps)
-    const arrival = integrator.run(problem, { ...control, maxSteps: patient })
-    if (arrival.ok) return arrival
-    const { firstStep: _, ...rest } = control
-    return integrator.run(problem, { ...rest, method: 'implicit', maxSteps: control.maxSteps - patient + 1 })
+  /** The cheaper way through a run, where there is one. */
+  function approachTo(run: Run, stopAt: number | undefined, length: number): Approach | undefined {
+    const substrate = substrateIn(state)
+    const start = { volume, substrate, enzyme: activeIn(state, totalEnzyme), productPool }
+    const stretch: Stretch = { run, start, length, integrator, tolerance: exactness.tolerance }
+    const supplied = charged + fedSubstrate
+    const steady = run.course.kind === 'steady'
+    if (steady && !run.feed)
+      return stopAt === undefined
+        ? undefined
+        : approachByReaction(model, Math.log(substrate / ((1 - stopAt) * supplied)), stretch)
+    if ((run.feed && !steady) || inactivation?.Kp !== undefined) return undefined
+    const left = stopAt === undefined ? undefined : (1 - stopAt) / substrate
+    const fedIn = run.feed?.substrate ?? 0
+    return approachInAmounts(
+      model,
+      left === undefined ? undefined : (t, m) => m - left * (supplied + fedAfter(run, t) * fedIn),
+      stretch,
+    )
   }
 
   /** Moves the surroundings to the end of a run. */
@@ -265,11 +279,6 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
   }
 }
 
-const never = (): number => Number.POSITIVE_INFINITY
+const noStates: readonly BatchState[] = []
 
-const sumOfWork = (a: Work, b: Work): Work => ({
-  stepsAccepted: a.stepsAccepted + b.stepsAccepted,
-  stepsRejected: a.stepsRejected + b.stepsRejected,
-  rateEvaluations: a.rateEvaluations + b.rateEvaluations,
-  jacobians: a.jacobians + b.jacobians,
-})
+const never = (): number => Number.POSITIVE_INFINITY

@@ -6,7 +6,7 @@
 import type { RateInto } from '../integrate/problem.ts'
 import type { Surroundings } from './log-rates.ts'
 import type { Batch } from './route.ts'
-import type { Run } from './timeline.ts'
+import type { FeedRun, Run } from './timeline.ts'
 
 export interface Rest {
   /** The components that then stand still, from the first to before the last. */
@@ -20,7 +20,7 @@ export interface Rest {
 /** Logarithm of the share of the charge below which substrate counts as spent; within reach of a double. */
 const logSpent = -575
 /** Logarithm of a share that a double does not see beside 1. */
-export const logUnseen = -41
+const logUnseen = -41
 /** Logarithm of an amount that is 0 in a double. */
 const logNothing = -746
 
@@ -85,4 +85,27 @@ export function levelOf(moving: readonly Rest[], y: ArrayLike<number>): number {
   let least = Number.POSITIVE_INFINITY
   for (const { level } of moving) least = Math.min(least, level(y))
   return least
+}
+
+/**
+ * A feed into next to nothing: a logarithm without bottom is lifted to what rounds away beside the amount fed, or
+ * its rate, fed over present, would be out of all bounds.
+ *
+ * Units    fed m³ over the whole run.
+ */
+export function liftForFeed(
+  { feed: { substrate }, model }: Batch,
+  state: Float64Array,
+  feed: FeedRun,
+  fed: number,
+): void {
+  const lift = (i: number, amount: number): void => {
+    state[i] = Math.max(state[i] as number, Math.log(amount) + logUnseen)
+  }
+  const { slow } = substrate
+  const enzymeAt = slow ? 2 : 1
+  lift(0, fed * feed.substrate * (1 - (slow?.share ?? 0)))
+  if (slow) lift(1, fed * feed.substrate * slow.share)
+  lift(enzymeAt, fed * feed.enzyme)
+  if (model.inactivation?.k2 && feed.enzyme > 0) lift(enzymeAt + 1, 1)
 }

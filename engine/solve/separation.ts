@@ -4,16 +4,14 @@
  *
  * Source   separation of variables; closed forms where the temperature stands still, Gauss–Legendre where it moves.
  */
-
-import { decayMean, logStretch } from '../kinetics/decay.ts'
 import type { Charge } from '../kinetics/integrated-rate-law.ts'
-import { type EnzymeForms, formIntegrals, formsAfter } from '../kinetics/series-inactivation.ts'
-import { increasingRoot } from '../numeric/roots.ts'
+import type { EnzymeForms } from '../kinetics/series-inactivation.ts'
 import { type Outcome, success } from '../outcome.ts'
-import { addCell, cellEnds, type Stretch } from './course-supply.ts'
+import { CourseSupply, type CourseWorkspace, courseWorkspace } from './course-supply.ts'
 import { type Advance, type Mover, march, sameMoment } from './march.ts'
 import { coordinateAfter, type ReactionPath, reactionPath } from './reaction-path.ts'
 import type { Batch, BatchState, Route, RouteFailure } from './route.ts'
+import { activeOf, type SteadyConstants, steadyForms, steadySupply, steadyTimeFor } from './steady-supply.ts'
 import { temperatureAt } from './temperature-course.ts'
 import type { Run } from './timeline.ts'
 
@@ -44,7 +42,8 @@ export function pathOf({ feed, model, timeline }: Batch): ReactionPath {
 /** The route of a batch that separates. */
 export function separationRoute(batch: Batch): Route {
   const path = pathOf(batch)
-  return (request) => march(batch, separationMover(batch, path), request)
+  const room = courseWorkspace()
+  return (request) => march(batch, new SeparationMover(batch, path, room), request)
 }
 
 /**
@@ -52,185 +51,200 @@ export function separationRoute(batch: Batch): Route {
  * its stated doses, kg/m³; it grows in proportion to the doses unless a hold waits for a conversion.
  */
 export function supplyUntil(batch: Batch, until: number, endless: boolean): Outcome<number, RouteFailure> {
-  const mover = separationMover(batch, pathOf(batch))
+  const mover = new SeparationMover(batch, pathOf(batch), courseWorkspace())
   const run = march(batch, mover, { doseScale: 1, until, endless })
-  return run.ok ? success(mover.supplied()) : run
+  return run.ok ? success(mover.supplied) : run
 }
 
-function separationMover({ feed, model }: Batch, path: ReactionPath): Mover & { supplied: () => number } {
-  const S0 = feed.substrate.concentration
-  const supplied = S0 + feed.product.concentration / model.massYield
-  const { inactivation } = model
-  const residual = inactivation?.residual ?? { first: 0, second: 0 }
-  let spent = 0
-  let u = 0
-  let forms: EnzymeForms = { native: 0, intermediate: 0, final: 0 }
-  const active = (f: EnzymeForms): number =>
-    f.native + residual.first * f.intermediate + residual.second * f.final
+const noWork = { stepsAccepted: 0, stepsRejected: 0, rateEvaluations: 0, jacobians: 0 }
 
-  const stateAt = (at: number, f: EnzymeForms, run: Run, τ: number, time: number): BatchState => {
-    const consumed = path.consumed(at)
-    const substrate = path.substrate(at)
-    const product = feed.product.concentration + model.massYield * consumed
+/** A separable batch in motion: enzyme-time supplied and forms of the enzyme; the substrate is found when asked. */
+class SeparationMover implements Mover {
+  /** Enzyme-time since the start, kg/m³. */
+  supplied = 0
+  private readonly batch: Batch
+  private readonly path: ReactionPath
+  private readonly room: CourseWorkspace
+  private readonly residual: SteadyConstants['residual']
+  private forms: EnzymeForms = { native: 0, intermediate: 0, final: 0 }
+  /** The coordinate that `supplied` comes to, once it has been sought. */
+  private u = 0
+  private uAt = 0
+  private aimedAt = Number.NaN
+  private targetAt: number | null = null
+  private demanded = Number.POSITIVE_INFINITY
+
+  constructor(batch: Batch, path: ReactionPath, room: CourseWorkspace) {
+    this.batch = batch
+    this.path = path
+    this.room = room
+    this.residual = batch.model.inactivation?.residual ?? { first: 0, second: 0 }
+  }
+
+  dose(mass: number): void {
+    const { native, intermediate, final } = this.forms
+    this.forms = { native: native + mass / this.batch.feed.volume, intermediate, final }
+  }
+
+  reached(conversion: number): boolean {
+    this.aim(conversion)
+    return this.targetAt !== null && (this.u >= this.targetAt || this.supplied >= this.demanded)
+  }
+
+  /** Coordinate and demand of the conversion that is asked for again and again. */
+  private aim(conversion: number): void {
+    if (this.aimedAt === conversion) return
+    this.aimedAt = conversion
+    this.targetAt = this.path.coordinate(conversion)
+    this.demanded = this.targetAt === null ? Number.POSITIVE_INFINITY : this.path.demand(this.targetAt)
+  }
+
+  activeEnzyme(): number {
+    return activeOf(this.residual, this.forms) * this.batch.feed.volume
+  }
+
+  state(time: number, run: Run, elapsed: number): BatchState {
+    if (this.uAt !== this.supplied) {
+      this.u = coordinateAfter(this.path, this.supplied, this.u)
+      this.uAt = this.supplied
+    }
+    return this.stateAt(this.u, this.forms, run, elapsed, time)
+  }
+
+  work(): typeof noWork {
+    return noWork
+  }
+
+  advance(
+    run: Run,
+    length: number,
+    stopAt: number | undefined,
+    outputs: readonly number[],
+  ): Outcome<Advance, RouteFailure> {
+    const { native, intermediate, final } = this.forms
+    if (!(native > 0 || intermediate > 0 || final > 0)) return this.standStill(run, length, outputs)
+    if (stopAt !== undefined) this.aim(stopAt)
+    const target = stopAt === undefined ? null : this.targetAt
+    const due = target === null ? Number.POSITIVE_INFINITY : this.demanded - this.supplied
+    return run.course.kind === 'steady'
+      ? this.steadily(run, length, target, due, outputs)
+      : this.alongCourse(run, length, target, due, outputs)
+  }
+
+  private steadily(
+    run: Run,
+    length: number,
+    target: number | null,
+    due: number,
+    outputs: readonly number[],
+  ): Outcome<Advance, RouteFailure> {
+    const { model } = this.batch
+    const T = run.course.from
+    const constants: SteadyConstants = {
+      k: model.k(run.pH)(T),
+      k1: model.inactivation ? model.inactivation.k1(run.pH)(T) : 0,
+      k2: model.inactivation?.k2?.(run.pH)(T),
+      residual: this.residual,
+    }
+    const { forms } = this
+    const stop = due <= 0 ? 0 : due < Number.POSITIVE_INFINITY ? steadyTimeFor(constants, forms, due) : null
+    const stopped = stop !== null && stop <= length
+    const elapsed = stopped ? stop : length
+    const states = this.outputsOf(run, elapsed, outputs, (τ) => ({
+      supplied: steadySupply(constants, forms, τ),
+      forms: steadyForms(constants, forms, τ),
+    }))
+    this.settle(stopped ? target : null, due, steadySupply(constants, forms, elapsed))
+    this.forms = steadyForms(constants, forms, elapsed)
+    return success({ elapsed, stopped, outputs: states })
+  }
+
+  private alongCourse(
+    run: Run,
+    length: number,
+    target: number | null,
+    due: number,
+    outputs: readonly number[],
+  ): Outcome<Advance, RouteFailure> {
+    const { model } = this.batch
+    const constants = { k: model.k(run.pH), k1: model.inactivation?.k1(run.pH) }
+    const E = this.forms.native
+    const supply = new CourseSupply(constants, model.steepness, run.course, length, this.room)
+    const stop = due <= 0 ? 0 : due < Number.POSITIVE_INFINITY ? supply.timeFor(due / E) : null
+    const stopped = stop !== null
+    const elapsed = stopped ? stop : length
+    const given = stopped ? due : E * supply.supplied()
+    const lost = stopped ? supply.lostUntil(elapsed) : supply.lost()
+    // The course is passed once more for the times wanted: cells that lie behind are not kept.
+    const again =
+      outputs.length > 0
+        ? new CourseSupply(constants, model.steepness, run.course, length, courseWorkspace())
+        : supply
+    const states = this.outputsOf(run, elapsed, outputs, (τ) => ({
+      supplied: E * again.suppliedUntil(τ),
+      forms: { native: E * Math.exp(-again.lostUntil(τ)), intermediate: 0, final: 0 },
+    }))
+    this.settle(stopped ? target : null, due, given)
+    this.forms = { native: E * Math.exp(-lost), intermediate: 0, final: 0 }
+    return success({ elapsed, stopped, outputs: states })
+  }
+
+  /** A run without enzyme: nothing happens in it but time. */
+  private standStill(run: Run, length: number, outputs: readonly number[]): Outcome<Advance, RouteFailure> {
+    const states = outputs.map((τ) => this.stateAt(this.u, this.forms, run, τ, τ))
+    return success({ elapsed: length, stopped: false, outputs: states })
+  }
+
+  /** Takes up the enzyme-time of a run; at a target exactly what it demanded. */
+  private settle(target: number | null, due: number, given: number): void {
+    if (target === null) {
+      this.supplied += given
+      return
+    }
+    // A hold whose conversion is there already ends where it began.
+    if (due <= 0) return
+    this.supplied += due
+    this.u = target
+    this.uAt = this.supplied
+  }
+
+  private outputsOf(
+    run: Run,
+    elapsed: number,
+    outputs: readonly number[],
+    at: (τ: number) => { readonly supplied: number; readonly forms: EnzymeForms },
+  ): readonly BatchState[] {
+    if (outputs.length === 0) return noStates
+    const states: BatchState[] = []
+    let near = this.u
+    for (const τ of outputs) {
+      if (τ > elapsed + sameMoment) break
+      const { supplied, forms } = at(τ)
+      near = coordinateAfter(this.path, this.supplied + supplied, near)
+      states.push(this.stateAt(near, forms, run, τ, τ))
+    }
+    return states
+  }
+
+  private stateAt(u: number, forms: EnzymeForms, run: Run, τ: number, time: number): BatchState {
+    const { feed, model } = this.batch
+    const { massYield } = model
+    const consumed = this.path.consumed(u)
+    const substrate = this.path.substrate(u)
+    const product = feed.product.concentration + massYield * consumed
+    const S0 = feed.substrate.concentration
     return {
       time,
       substrate,
       product,
-      enzyme: active(f),
+      enzyme: activeOf(this.residual, forms),
       temperature: temperatureAt(run.course, Number.isFinite(τ) ? τ : 0),
       pH: run.pH,
       volume: feed.volume,
       conversion: consumed / S0,
-      imbalance: (substrate + product / model.massYield) / supplied - 1,
+      imbalance: (substrate + product / massYield) / (S0 + feed.product.concentration / massYield) - 1,
     }
-  }
-
-  /** Enzyme-time supplied and forms left after τ of a run at steady temperature. */
-  const steady = (run: Run) => {
-    const T = run.course.from
-    const k = model.k(run.pH)(T)
-    const k1 = inactivation ? inactivation.k1(run.pH)(T) : 0
-    const k2 = inactivation?.k2?.(run.pH)(T)
-    const start = forms
-    const supply = (τ: number): number => {
-      if (k2 === undefined) {
-        if (τ === Number.POSITIVE_INFINITY)
-          return k1 > 0 ? (k * start.native) / k1 : unless0(k * start.native)
-        return k * start.native * τ * decayMean(k1 * τ)
-      }
-      if (τ === Number.POSITIVE_INFINITY) return endlessSupply(k, k1, k2, start)
-      const integrals = formIntegrals(start, k1, k2, τ)
-      return k * active(integrals)
-    }
-    const endlessSupply = (k: number, k1: number, k2: number, from: EnzymeForms): number => {
-      const lasting =
-        k1 === 0
-          ? active(from)
-          : k2 === 0
-            ? residual.first
-            : residual.second * (from.native + from.intermediate + from.final)
-      if (k * lasting > 0) return Number.POSITIVE_INFINITY
-      return (k * from.native) / k1 + (residual.first * k * (from.native + from.intermediate)) / k2
-    }
-    const left = (τ: number): EnzymeForms => {
-      if (k2 !== undefined)
-        return τ === Number.POSITIVE_INFINITY
-          ? formsAfter(start, k1, k2, Number.MAX_VALUE)
-          : formsAfter(start, k1, k2, τ)
-      const decay = k1 === 0 ? 0 : k1 * τ
-      return { native: start.native * Math.exp(-decay), intermediate: 0, final: 0 }
-    }
-    /** Time in which the run supplies an amount; null where it never does. */
-    const timeFor = (amount: number): number | null => {
-      if (k2 === undefined) {
-        const undecayed = amount / (k * start.native)
-        if (!Number.isFinite(undecayed)) return null
-        const x = k1 * undecayed
-        return x < 1 ? undecayed * logStretch(x) : null
-      }
-      if (!(supply(Number.POSITIVE_INFINITY) > amount)) return null
-      let high = amount / (k * active(start)) || 1
-      while (supply(high) < amount) high *= 2
-      return increasingRoot(
-        (τ, at) => {
-          at.value = supply(τ) - amount
-          at.slope = k * active(formsAfter(start, k1, k2, τ))
-        },
-        0,
-        high,
-        0.5 * high,
-      )
-    }
-    return { supply, left, timeFor }
-  }
-
-  /** The same for a run whose temperature moves; the enzyme is then lost in one step only. */
-  const moving = (run: Run, length: number) => {
-    const E = forms.native
-    const constants = { k: model.k(run.pH), ...(inactivation && { k1: inactivation.k1(run.pH) }) }
-    const ends = cellEnds(constants, model.steepness, run.course, length)
-    const starts: { at: number; supplied: number; loss: number }[] = [{ at: 0, supplied: 0, loss: 0 }]
-    const stretch: Stretch = { supplied: 0, loss: 0 }
-    let a = 0
-    for (const b of ends) {
-      addCell(constants, run.course, a, b, stretch)
-      starts.push({ at: b, supplied: stretch.supplied, loss: stretch.loss })
-      a = b
-    }
-    const upTo = (τ: number): Stretch => {
-      let i = 0
-      while (i + 1 < starts.length && (starts[i + 1] as { at: number }).at <= τ) i++
-      const start = starts[i] as { at: number; supplied: number; loss: number }
-      const at: Stretch = { supplied: start.supplied, loss: start.loss }
-      if (τ > start.at) addCell(constants, run.course, start.at, τ, at)
-      return at
-    }
-    const supply = (τ: number): number => E * upTo(τ).supplied
-    const left = (τ: number): EnzymeForms => ({
-      native: E * Math.exp(-upTo(τ).loss),
-      intermediate: 0,
-      final: 0,
-    })
-    const timeFor = (amount: number): number | null => {
-      if (!(E * stretch.supplied >= amount)) return null
-      let i = 1
-      while (E * (starts[i] as Stretch).supplied < amount) i++
-      const low = starts[i - 1] as { at: number; supplied: number }
-      const high = starts[i] as { at: number; supplied: number }
-      const share = (amount / E - low.supplied) / (high.supplied - low.supplied)
-      return increasingRoot(
-        (τ, at) => {
-          const here = upTo(τ)
-          at.value = E * here.supplied - amount
-          at.slope = E * constants.k(temperatureAt(run.course, τ)) * Math.exp(-here.loss)
-        },
-        low.at,
-        high.at,
-        low.at + share * (high.at - low.at),
-      )
-    }
-    return { supply, left, timeFor }
-  }
-
-  return {
-    supplied: () => spent,
-    dose: (mass) => {
-      forms = { ...forms, native: forms.native + mass / feed.volume }
-    },
-    conversion: () => path.consumed(u) / S0,
-    activeEnzyme: () => active(forms) * feed.volume,
-    state: (time, run, elapsed) => stateAt(u, forms, run, elapsed, time),
-    work: () => ({ stepsAccepted: 0, stepsRejected: 0, rateEvaluations: 0, jacobians: 0 }),
-    advance: (run, length, stopAt, outputs) => {
-      const alive = forms.native > 0 || forms.intermediate > 0 || forms.final > 0
-      const piece = run.course.kind === 'steady' || !alive ? steady(run) : moving(run, length)
-      let elapsed = length
-      let stopped = false
-      if (stopAt !== undefined && alive) {
-        const target = path.coordinate(stopAt)
-        const due = target === null ? null : path.demand(target) - spent
-        const time = due === null ? null : due <= 0 ? 0 : piece.timeFor(due)
-        if (time !== null && time <= length && target !== null) {
-          elapsed = time
-          stopped = true
-          u = target
-        }
-      }
-      const states: BatchState[] = []
-      let near = u
-      for (const τ of outputs) {
-        if (τ > elapsed + sameMoment) break
-        near = coordinateAfter(path, spent + piece.supply(τ), stopped ? 0 : near)
-        states.push(stateAt(near, piece.left(τ), run, τ, τ))
-      }
-      spent += piece.supply(elapsed)
-      forms = piece.left(elapsed)
-      if (!stopped) u = coordinateAfter(path, spent, u)
-      const value: Advance = { elapsed, stopped, outputs: states }
-      return success(value)
-    },
   }
 }
 
-/** Endless supply of an enzyme that does not decay: without bound if there is any. */
-const unless0 = (rate: number): number => (rate > 0 ? Number.POSITIVE_INFINITY : 0)
+const noStates: readonly BatchState[] = []

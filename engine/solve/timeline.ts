@@ -118,6 +118,9 @@ export function timeline(programme: Programme): Timeline {
   return { steps, after, countDoseVolume: programme.countDoseVolume, endless: false }
 }
 
+/** Time constants after which a jacket's approach has no difference left that a double sees. */
+const settling = 40
+
 /** Volume flow of a feed, m³/s. */
 function volumeFlow(flow: FeedFlow, density: Density | undefined): number {
   if (flow.per === 'volume') return flow.value
@@ -155,8 +158,13 @@ function heating(
       jacket: jacket.temperature,
       timeConstant: jacket.timeConstant,
     }
-    const reaches = up * jacket.temperature > up * to
-    pieces.push({ course, duration: reaches ? timeAtTemperature(course, to) : Number.POSITIVE_INFINITY })
+    if (up * jacket.temperature > up * to) pieces.push({ course, duration: timeAtTemperature(course, to) })
+    else {
+      // The set point is never reached: the jacket's temperature is, and the phase has no end.
+      const settled: TemperatureCourse = { kind: 'steady', from: jacket.temperature }
+      pieces.push({ course, duration: settling * jacket.timeConstant })
+      pieces.push({ course: settled, duration: Number.POSITIVE_INFINITY })
+    }
   }
   return pieces
 }

@@ -1,0 +1,123 @@
+/**
+ * Ways through a run that are cheaper than the logarithms in time, as far as they carry: along the reaction
+ * coordinate at a steady temperature, in plain amounts where the temperature moves or substrate is fed.
+ */
+import type { Work } from '../answer.ts'
+import type { Integrator } from '../integrate/integrator.ts'
+import type { EnzymeModel } from './enzyme-model.ts'
+import { plainRates } from './plain-rates.ts'
+import { type ReactionStart, reactionRates } from './reaction-rates.ts'
+import type { Run } from './timeline.ts'
+
+export interface Approach {
+  /** s since the run's start */
+  readonly elapsed: number
+  /** The target, the run's end, or neither: something was nearly spent, and logarithms are the better coordinates. */
+  readonly end: 'target' | 'run' | 'spent'
+  /** ln of the substrate's and of the enzyme's increase. */
+  readonly lnSubstrate: number
+  readonly lnEnzyme: number
+  readonly work: Work
+}
+
+/** What is to be passed, and how exactly. */
+export interface Stretch {
+  readonly run: Run
+  readonly start: ReactionStart
+  /** s */
+  readonly length: number
+  readonly integrator: Integrator
+  readonly tolerance: number
+}
+
+/** Below this share of its start the enzyme makes time too steep a function of conversion. */
+const spentEnzyme = 1e-3
+/** Below this share of its start plain substrate has too few digits. */
+const spentSubstrate = 1e-2
+/** A run that takes more steps than this is not the smooth one that these coordinates are for. */
+const mostSteps = 2000
+/** The first step of a fifth-order method in coordinates of order one. */
+const firstStepOf = (tolerance: number): number => 5 * Math.sqrt(Math.sqrt(tolerance)) * tolerance ** -0.05
+
+/**
+ * Steps along u = ln(m0/m) to `u`, or to where the run ends or the enzyme is spent; at a steady temperature.
+ *
+ * Shapes   undefined where the reaction does not go forward or the stepping gives up.
+ */
+export function approachByReaction(
+  model: EnzymeModel,
+  u: number,
+  { run, start, length, integrator, tolerance }: Stretch,
+): Approach | undefined {
+  if (!(u > 0 && u < 700)) return undefined
+  const rates = reactionRates(model, run, start)
+  if (!rates) return undefined
+  const { timeScale } = rates
+  const last = length / timeScale
+  const arrival = integrator.run(
+    {
+      rate: rates.rate,
+      start: 0,
+      end: u,
+      initial: Float64Array.of(0, 1),
+      event: (_, y) => Math.min(last - (y[0] as number), (y[1] as number) - spentEnzyme),
+    },
+    {
+      relative: tolerance,
+      absolute: tolerance,
+      maxSteps: mostSteps,
+      method: 'explicit',
+      firstStep: Math.min(u, last, firstStepOf(tolerance)),
+    },
+  )
+  if (!arrival.ok) return undefined
+  const { time: at, state, event, work } = arrival.value
+  const ended = event && last - (state[0] as number) <= 1e-9 * last
+  return {
+    elapsed: ended ? length : (state[0] as number) * timeScale,
+    end: !event ? 'target' : ended ? 'run' : 'spent',
+    lnSubstrate: -at,
+    lnEnzyme: Math.log(state[1] as number),
+    work,
+  }
+}
+
+/**
+ * Steps through a run in plain amounts, to its end or to where `due` falls to 0 or something is nearly spent.
+ *
+ * Shapes   due(t, m) of the time and the substrate's mass relative to the start; undefined where the stepping gives up.
+ */
+export function approachInAmounts(
+  model: EnzymeModel,
+  due: ((t: number, m: number) => number) | undefined,
+  { run, start, length, integrator, tolerance }: Stretch,
+): Approach | undefined {
+  const left = (y: ArrayLike<number>): number =>
+    Math.min((y[0] as number) - spentSubstrate, (y[1] as number) - spentEnzyme)
+  const arrival = integrator.run(
+    {
+      rate: plainRates(model, run, start),
+      start: 0,
+      end: length,
+      initial: Float64Array.of(1, 1),
+      event: due ? (t, y) => Math.min(left(y), due(t, y[0] as number)) : (_, y) => left(y),
+    },
+    {
+      relative: tolerance,
+      absolute: 0.01 * tolerance,
+      maxSteps: mostSteps,
+      method: 'explicit',
+      firstStep: length * Math.min(1, firstStepOf(tolerance)),
+    },
+  )
+  if (!arrival.ok) return undefined
+  const { time: elapsed, state, event, work } = arrival.value
+  const reached = event && due !== undefined && due(elapsed, state[0] as number) <= Math.max(0, left(state))
+  return {
+    elapsed,
+    end: !event ? 'run' : reached ? 'target' : 'spent',
+    lnSubstrate: Math.log(state[0] as number),
+    lnEnzyme: Math.log(state[1] as number),
+    work,
+  }
+}

@@ -1,0 +1,74 @@
+/**
+ * The balances of a batch in amounts as they are, relative to those at the run's start: the cheapest view where the
+ * temperature moves or substrate is fed in and neither substrate nor enzyme comes near its end.
+ *
+ * Shapes   y = [substrate, enzyme], both 1 at the start; a negative amount gives a rate that is not a number, so
+ *          that no step into it is ever accepted.
+ * Source   balances of a well-mixed batch; kg and s.
+ */
+import type { RateInto } from '../integrate/problem.ts'
+import type { EnzymeModel } from './enzyme-model.ts'
+import type { ReactionStart } from './reaction-rates.ts'
+import { temperatureAt } from './temperature-course.ts'
+import type { Run } from './timeline.ts'
+
+/** The rates of one run with a uniform substrate and one step of inactivation at most; t in s from the run's start. */
+export function plainRates(model: EnzymeModel, run: Run, start: ReactionStart): RateInto {
+  return run.feed ? fedRates(model, run, start) : movingRates(model, run, start)
+}
+
+function movingRates(model: EnzymeModel, run: Run, start: ReactionStart): RateInto {
+  const { volume, substrate: m0, enzyme: E0, productPool } = start
+  const { Km, Kic, Kiu, Ksi, Keq } = model.law(run.pH)
+  const y = model.massYield
+  const pool = productPool / volume
+  const a = (Km * (Kic === undefined ? 1 : 1 + pool / Kic) * volume) / E0
+  const b = ((1 + (Kiu === undefined ? 0 : pool / Kiu) - (Kic === undefined ? 0 : (y * Km) / Kic)) * m0) / E0
+  const c =
+    (((Ksi === undefined ? 0 : 1 / Ksi) - (Kiu === undefined ? 0 : y / Kiu)) * m0 * m0) / (volume * E0)
+  const reverse = Keq === undefined ? 1 : 1 + y / Keq
+  const backward = Keq === undefined ? 0 : productPool / (Keq * m0)
+  const k = model.k(run.pH)
+  const kd = model.inactivation?.k1(run.pH)
+  const { course } = run
+  const linear = course.kind === 'linear'
+  const from = course.from
+  const slope = linear ? course.slope : 0
+  return (out, state, t) => {
+    const m = state[0] as number
+    const E = state[1] as number
+    const T = linear ? from + slope * t : temperatureAt(course, t)
+    const drive = (k(T) * E) / (a + m * (b + c * m))
+    out[0] = m > 0 ? drive * (backward - reverse * m) : Number.NaN
+    out[1] = kd ? -kd(T) * E : 0
+  }
+}
+
+function fedRates(model: EnzymeModel, run: Run, start: ReactionStart): RateInto {
+  const { volume: V0, substrate: m0, enzyme: E0, productPool } = start
+  const { Km, Kic, Kiu, Ksi, Keq } = model.law(run.pH)
+  const y = model.massYield
+  const perKic = Kic === undefined ? 0 : 1 / Kic
+  const perKiu = Kiu === undefined ? 0 : 1 / Kiu
+  const perKsi = Ksi === undefined ? 0 : 1 / Ksi
+  const perKeq = Keq === undefined ? 0 : 1 / Keq
+  const { feed } = run
+  const { flow, flowSlope, substrate, product, enzyme } = feed ?? noFeed
+  const k = model.k(run.pH)(run.course.from) * E0
+  const kd = model.inactivation ? model.inactivation.k1(run.pH)(run.course.from) : 0
+  const poolIn = product + y * substrate
+  return (out, state, t) => {
+    const m = (state[0] as number) * m0
+    const E = state[1] as number
+    const fed = t * (flow + 0.5 * flowSlope * t)
+    const V = V0 + fed
+    const rate = flow + flowSlope * t
+    const S = m / V
+    const P = (productPool + fed * poolIn) / V - y * S
+    const D = Km * (1 + P * perKic) + S * (1 + P * perKiu) + S * S * perKsi
+    out[0] = m > 0 ? (rate * substrate - (k * E * (S - P * perKeq)) / D) / m0 : Number.NaN
+    out[1] = (rate * enzyme) / E0 - kd * E
+  }
+}
+
+const noFeed = { flow: 0, flowSlope: 0, substrate: 0, product: 0, enzyme: 0 }

@@ -1,0 +1,12 @@
+/**
+ * `npm run bench`: what the engine's answers cost, as ratios to yardsticks of the same run, each with the error
+ * achieved. Times are medians of interleaved repeats; only the ratios are worth quoting.
+ */
+import { closedForms } from './closed-forms.ts'
+import { odeEngine } from './ode-engine.ts'
+import { againstScipy } from './scipy.ts'
+
+console.log(`Node ${process.versions.node}, ${process.platform} ${process.arch}\n`)
+closedForms()
+odeEngine()
+await againstScipy()
