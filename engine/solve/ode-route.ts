@@ -9,9 +9,10 @@ import { failed, success } from '../outcome.ts'
 import { type Approach, approachByReaction, approachInAmounts, type Stretch } from './approach.ts'
 import { logRates, type Surroundings } from './log-rates.ts'
 import { type Mover, march } from './march.ts'
-import { patientRun, sumOfWork } from './patient-run.ts'
-import { levelOf, liftForFeed, type Rest, restsOf, stillOf } from './rest.ts'
+import { sumOfWork } from './patient-run.ts'
+import { liftForFeed, restsOf } from './rest.ts'
 import type { Batch, BatchState, Route } from './route.ts'
+import { runToRest } from './run-to-rest.ts'
 import { temperatureAt } from './temperature-course.ts'
 import type { Run } from './timeline.ts'
 
@@ -27,9 +28,6 @@ export const standardExactness: Exactness = { tolerance: 1e-8, method: 'automati
 
 /** Logarithms of any size keep this share of themselves: an enzyme e^(−1e9) has no digits to keep. */
 const logRoundOff = 1e-13
-
-/** An event this near, in logarithms, has been met. */
-const located = 1e-9
 
 /** Where an endless run is cut, s: later than anything happens, save in numbers no plant has. */
 const endOfTime = 1e30
@@ -161,74 +159,41 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
       }
       const substrateFed = run.feed?.substrate ?? 0
       const supplied = charged + fedSubstrate
-      let control: Control = {
+      const control: Control = {
         relative: logRoundOff,
         // An early target hangs on a small change of the logarithm, and that change has to be known as well.
-        absolute: Math.max(
-          10 * logRoundOff,
-          exactness.tolerance * Math.min(1, -Math.log1p(-(stopAt ?? 0.999))),
-        ),
+        absolute: Math.max(10 * logRoundOff, exactness.tolerance * shareOf(stopAt)),
         maxSteps: exactness.maxSteps,
         method: exactness.method,
         ...(step !== undefined && step > 0 && { firstStep: Math.min(step, end) }),
       }
       const rate = logRates(model, slow, run, start)
-      let due =
-        stopAt === undefined
-          ? never
-          : (τ: number, y: ArrayLike<number>): number =>
-              Math.log(substrateIn(y) / ((1 - stopAt) * (supplied + fedAfter(run, τ) * substrateFed)))
-      const resting: Rest[] = []
-      let moving = run.feed ? [] : restsOf(batch, run, start, supplied, exactness.tolerance)
-      const states: BatchState[] = []
-      let stopped = false
-      let near = located
-      for (;;) {
-        if (Number.isNaN(Math.min(due(from, state), levelOf(moving, state))))
-          return failed({ kind: 'rate-not-finite', time: from, component: 0, reached: { time: from, state } })
-        const wanted = outputs.slice(states.length)
-        const arrival = patientRun(
-          integrator,
-          {
-            rate: stillOf(rate, resting),
-            start: from,
-            end,
-            initial: state,
-            event: (τ, y) => Math.min(due(τ, y), levelOf(moving, y)),
-            ...(wanted.length > 0 && {
-              outputs: Float64Array.from(wanted, (τ) => Math.min(end, Math.max(from, τ))),
-            }),
-          },
-          control,
-        )
-        if (!arrival.ok) return failed(arrival.failure)
-        const { time, event, nextStep, outputs: rows, outputsReached } = arrival.value
-        work = sumOfWork(work, arrival.value.work)
-        for (let i = 0; i < outputsReached; i++) {
-          const τ = wanted[i] as number
-          states.push(stateAt(rows.subarray(i * state.length, (i + 1) * state.length), run, τ, τ, start))
-        }
-        state.set(arrival.value.state)
-        step = nextStep
-        from = time
-        if (!event) break
-        const level = levelOf(moving, state)
-        stopped = due(time, state) <= Math.min(near, level)
-        if (stopped) break
-        // An event inside a step of many ages is met only nearly: step on to it from there.
-        const rest = level <= near ? moving.find((one) => one.level(state) === level) : undefined
-        control = { ...control, firstStep: 0 }
-        if (rest === undefined) {
-          near *= 10
-          if (!(near < 1e30)) return failed({ kind: 'step-too-small', time, reached: { time, state } })
-          continue
-        }
-        rest.settle(state)
-        resting.push(rest)
-        moving = moving.filter(({ components }) => components[0] !== rest.components[0])
-        if (rest.components[0] === 0) due = never
-      }
-      const elapsed = stopped || from < end ? from : length
+      const passage = runToRest(
+        integrator,
+        state,
+        {
+          rate,
+          from,
+          end,
+          due:
+            stopAt === undefined
+              ? undefined
+              : (τ, y) =>
+                  Math.log(substrateIn(y) / ((1 - stopAt) * (supplied + fedAfter(run, τ) * substrateFed))),
+          moving: run.feed ? [] : restsOf(batch, run, start, supplied, exactness.tolerance),
+          outputs,
+        },
+        control,
+      )
+      if (!passage.ok) return failed(passage.failure)
+      const { time, stopped, nextStep } = passage.value
+      work = sumOfWork(work, passage.value.work)
+      step = nextStep
+      const states = passage.value.states.map((y, i) => {
+        const τ = outputs[i] as number
+        return stateAt(y, run, τ, τ, start)
+      })
+      const elapsed = stopped || time < end ? time : length
       settle(run, elapsed)
       return success({ elapsed, stopped, outputs: states })
     },
@@ -251,7 +216,7 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
     return approachInAmounts(
       model,
       left === undefined ? undefined : (t, m) => m - left * (supplied + fedAfter(run, t) * fedIn),
-      stretch,
+      { ...stretch, tolerance: Math.max(1e-14, exactness.tolerance * shareOf(stopAt)) },
     )
   }
 
@@ -281,4 +246,6 @@ function odeMover(batch: Batch, integrator: Integrator, exactness: Exactness): M
 
 const noStates: readonly BatchState[] = []
 
-const never = (): number => Number.POSITIVE_INFINITY
+/** How much of the way to the end, in logarithms, a target lies; 1 without one. */
+const shareOf = (target: number | undefined): number =>
+  target === undefined ? 1 : Math.min(1, -Math.log1p(-target))
