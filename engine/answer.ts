@@ -37,8 +37,8 @@ export interface Check {
   readonly relativeDifference: number | null
 }
 
-/** Integration in logarithms, by explicit steps or by implicit ones. */
-export type CheckMethod = 'ode-log-explicit' | 'ode-log-implicit'
+/** Integration by explicit steps or by implicit ones, or quadrature along the reaction. */
+export type CheckMethod = 'ode-explicit' | 'ode-implicit' | 'quadrature'
 
 /** Columns of one length; the state at the moment of a dose is the one after it. */
 export interface Trace {

@@ -67,7 +67,7 @@ export const remedySentence = (remedy: Remedy): string => {
     case 'lower-target':
       return `A target of ${percent(remedy.conversion)} conversion takes ${hours(remedy.time)}.`
     case 'less-inhibition':
-      return `Were the product taken away as it forms, or an enzyme chosen that it does not inhibit, ${takes}.`
+      return `With half the inhibition (product taken away as it forms, or another enzyme) ${takes}.`
     case 'better-pH':
       return `At pH ${formatNumber(remedy.pH)} ${takes}.`
     case 'longer-hold':
@@ -112,10 +112,12 @@ export const hoursCauseSentence = (cause: HoursCause): string => {
 /** By which independent route an answer was checked. */
 export const checkMethodSentence = (method: CheckMethod): string => {
   switch (method) {
-    case 'ode-log-explicit':
-      return 'step-by-step integration in logarithms, explicit'
-    case 'ode-log-implicit':
-      return 'step-by-step integration in logarithms, implicit'
+    case 'ode-explicit':
+      return 'step-by-step integration, explicit'
+    case 'ode-implicit':
+      return 'step-by-step integration, implicit'
+    case 'quadrature':
+      return 'quadrature along the reaction'
     default:
       return method satisfies never
   }

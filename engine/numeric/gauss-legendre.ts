@@ -35,8 +35,7 @@ export function gaussLegendre(n: number): Quadrature {
   return { nodes, weights }
 }
 
-export const gauss4 = gaussLegendre(4)
-export const gauss8 = gaussLegendre(8)
+/** The rule of 16 points. */
 export const gauss16 = gaussLegendre(16)
 
 /** Integral of f over [a, b] by one panel of the rule. */

@@ -3,6 +3,7 @@ import { bracketedRoot } from '../numeric/roots.ts'
 import { failed, type Outcome, success } from '../outcome.ts'
 import { budget, overspent, stepsOf } from './budget.ts'
 import { equilibriumBefore } from './equilibrium.ts'
+import { leastScaleByQuadrature } from './protected-batch.ts'
 import type { Route, RouteFailure } from './route.ts'
 import { pathOf, supplyUntil } from './separation.ts'
 import type { Solver } from './solver.ts'
@@ -114,6 +115,8 @@ export function checkedScale(
  */
 export function leastDoseScale(solver: Solver, conversion: number): Outcome<number | null, RouteFailure> {
   if (!solver.batch.model.inactivation) return success(null)
+  const integrated = leastScaleByQuadrature(solver.batch, conversion)
+  if (integrated !== undefined) return success(integrated > 0 ? integrated : null)
   const least = doseScaleFor(solver, conversion, Number.POSITIVE_INFINITY, true)
   if (!least.ok) return failed(least.failure)
   return success(least.value.kind === 'scale' && least.value.scale > 0 ? least.value.scale : null)

@@ -76,7 +76,7 @@ export function findDose(
     check,
     ...(factor !== undefined && { precision: { amplification: factor, digits: honestDigits(factor) } }),
     ...(hours && { hours }),
-    remedies: shorteningRemedies(withDoses(scenario, scale), dosed, conversion, { time, dosed: run.dosed }),
+    remedies: shorteningRemedies(withDoses(scenario, scale), dosed, conversion, time),
     work: workOf(run),
     massBalance: massBalanceOf([run.end]),
     warnings,

@@ -1,6 +1,6 @@
 /** How long a stated plan takes to its conversion, and what stands in its way if it never gets there. */
 
-import type { Warning } from '../answer.ts'
+import type { Check, Warning } from '../answer.ts'
 import { failed, type Outcome, success } from '../outcome.ts'
 import type { Scenario } from '../scenario.ts'
 import { type Mass, quantity, type Temperature, type Time } from '../units/quantity.ts'
@@ -18,6 +18,7 @@ import {
 import { leastDoseScale } from './dose.ts'
 import { equilibriumBefore } from './equilibrium.ts'
 import { hoursLedger } from './hours.ts'
+import { timeByQuadrature } from './protected-batch.ts'
 import { amplification, honestDigits, reach, restingConversion } from './reach.ts'
 import { reachabilityRemedies, shorteningRemedies } from './remedies.ts'
 import type { RouteFailure } from './route.ts'
@@ -49,9 +50,13 @@ export function findTime(
   if (time === undefined) return unreachable(scenario, solver, conversion, warnings, shared)
 
   const checked = reach(solver, conversion, 1, solver.checks)
-  const check = checkOf(solver, time, checked.ok ? (checked.value.time ?? null) : null)
+  const integrated = timeByQuadrature(solver.batch, conversion)
+  const check: Check =
+    integrated === undefined
+      ? checkOf(solver, time, checked.ok ? (checked.value.time ?? null) : null)
+      : { ...checkOf(solver, time, integrated), method: 'quadrature' }
   const factor = amplification(solver, reached.value, conversion)
-  warnings.push(...gaveUp(checked), ...checkWarnings(check, factor))
+  warnings.push(...(integrated === undefined ? gaveUp(checked) : []), ...checkWarnings(check, factor))
   const digits = factor === undefined ? undefined : honestDigits(factor)
   if (factor !== undefined && digits !== undefined && factor > 1e3)
     warnings.push({ code: 'near-the-edge', amplification: factor, digits })
@@ -64,13 +69,13 @@ export function findTime(
     reachable: true,
     time: quantity<Time>(time),
     conversion,
-    dose: quantity<Mass>(run.dosed),
+    dose: quantity<Mass>(solver.fullDose),
     temperature: quantity<Temperature>(run.end.temperature),
     ...shared,
     check,
     ...(factor !== undefined && digits !== undefined && { precision: { amplification: factor, digits } }),
     ...(hours && { hours }),
-    remedies: shorteningRemedies(scenario, solver, conversion, { time, dosed: run.dosed }),
+    remedies: shorteningRemedies(scenario, solver, conversion, time),
     work: checked.ok ? workOf(run, checked.value.run) : run.work,
     massBalance: massBalanceOf([run.end, ...(checked.ok ? [checked.value.run.end] : [])]),
     warnings,

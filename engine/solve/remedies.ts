@@ -19,7 +19,7 @@ export function shorteningRemedies(
   scenario: Scenario,
   solver: Solver,
   conversion: number,
-  { time, dosed }: { readonly time: number; readonly dosed: number },
+  time: number,
 ): Remedy[] {
   const found: Remedy[] = []
   const consider = (remedy: Remedy): void => {
@@ -27,7 +27,7 @@ export function shorteningRemedies(
   }
   const t = (changed: Solver, target = conversion, scale = 1): Time =>
     quantity<Time>(timeTo(changed, target, scale))
-  const dose = quantity<Mass>(dosed * doseStep)
+  const dose = quantity<Mass>(solver.fullDose * doseStep)
   consider({ kind: 'more-dose', dose, time: t(solver, conversion, doseStep) })
   const hold = holdTemperature(scenario.programme)
   for (const [kind, step] of [

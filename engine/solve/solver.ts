@@ -35,7 +35,7 @@ export function solverOf(scenario: Scenario): Solver {
     separable,
     answers: separable ? separationRoute(batch) : odeRoute(batch, answering),
     checks: odeRoute(batch, separable ? checking : checkingImplicitly),
-    checkMethod: separable ? 'ode-log-explicit' : 'ode-log-implicit',
+    checkMethod: separable ? 'ode-explicit' : 'ode-implicit',
     fullDose: steps.reduce((sum, step) => sum + (step.kind === 'dose' ? step.mass : 0), 0),
     firstDoseAt: steps
       .slice(0, Math.max(0, firstDose))

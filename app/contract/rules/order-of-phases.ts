@@ -10,6 +10,10 @@ type Complain = (message: string, ...below: readonly string[]) => void
 /** What has happened before a phase; `unread` once a phase could not be recognised. */
 interface Course {
   temperature: Temperature | undefined
+  /** The temperature has been changed: a hold may be a heat treatment. */
+  treated: boolean
+  /** A hold before the first dose is worth a word: a dose does follow, and no trace shows the wait. */
+  readonly idle: boolean
   dosed: boolean
   killed: boolean
   unread: boolean
@@ -25,7 +29,14 @@ export const phasesFollow = (file: unknown, ctx: Ctx): void => {
     return
   }
   const start = part(file, 'programme', 'start', 'temperature')
-  const course: Course = { temperature: asTemperature(start), dosed: false, killed: false, unread: false }
+  const course: Course = {
+    temperature: asTemperature(start),
+    treated: false,
+    idle: part(file, 'ask', 'find') !== 'trace' && phases.some((phase) => part(phase, 'phase') === 'dose'),
+    dosed: false,
+    killed: false,
+    unread: false,
+  }
   for (const [n, phase] of phases.entries()) {
     follow(course, phase, (message, ...below) => complain(ctx, message, 'programme', 'phases', n, ...below))
   }
@@ -44,8 +55,10 @@ const follow = (course: Course, phase: unknown, say: Complain): void => {
       course.dosed = true
       return
     case 'hold':
-      if (!course.dosed && !course.unread && part(phase, 'until') !== undefined) {
-        say('waits for a conversion before any dose is given', 'until')
+      if (course.dosed || course.unread) return
+      if (part(phase, 'until') !== undefined) say('waits for a conversion before any dose is given', 'until')
+      else if (course.idle && !course.treated) {
+        say('a hold before any dose, at the temperature of the start, does nothing; give the dose before it')
       }
       return
     case 'feed':
@@ -81,6 +94,7 @@ const change = (
 ): void => {
   const before = course.temperature
   const to = asTemperature(part(phase, 'to'))
+  course.treated = true
   course.temperature = to
   if (before === undefined || to === undefined) return
   const up = kind !== 'cool'

@@ -85,6 +85,13 @@ export const badKeys: readonly BadInputCase[] = [
     lines: ['programme.phases: found an empty list; at least a dose is due'],
   },
   {
+    what: 'a hold before any dose',
+    input: phases('{ "phase": "hold", "for": "2 h" }', dose),
+    lines: [
+      'programme.phases[0]: a hold before any dose, at the temperature of the start, does nothing; give the dose before it',
+    ],
+  },
+  {
     what: 'a hold for a conversion before any dose',
     input: phases('{ "phase": "hold", "until": { "conversion": 0.5 }, "atMost": "2 h" }', dose),
     lines: ['programme.phases[0].until: waits for a conversion before any dose is given'],

@@ -384,7 +384,7 @@ describe.each(groups)('$name', ({ name, lines }) => {
   test.each(ids)('%s carries a check that agrees', (id) => {
     for (const one of lines.filter((line) => line.id === id)) {
       const { check } = answerTo(one)
-      expect(check?.method).toMatch(/^ode-log-(ex|im)plicit$/)
+      expect(check?.method).toMatch(/^ode-(ex|im)plicit$/)
       const got = check?.relativeDifference ?? Number.NaN
       checked.hold(
         id,

@@ -39,7 +39,7 @@ export const fullAnswer: Answer = {
     volume: Float64Array.of(12, 12),
     conversion: Float64Array.of(0, 0.3822),
   },
-  check: { method: 'ode-log-explicit', relativeDifference: 1.3e-10 },
+  check: { method: 'ode-explicit', relativeDifference: 1.3e-10 },
   precision: { amplification: 12.5, digits: 4 },
   hours: {
     total: hours(9.412),

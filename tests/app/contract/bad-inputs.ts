@@ -535,6 +535,13 @@ export const badInputs: readonly (readonly [name: string, text: string, faults: 
     ],
   ],
   [
+    'a hold before any dose',
+    phases([`${list}[0]`, { phase: 'hold', for: '1 h' }]),
+    [
+      'programme.phases[0]: a hold before any dose, at the temperature of the start, does nothing; give the dose before it',
+    ],
+  ],
+  [
     'a wait for a conversion before any dose',
     phases([`${list}[0]`, { phase: 'hold', until: { conversion: 0.5 }, atMost: '1 h' }]),
     ['programme.phases[0].until: waits for a conversion before any dose is given'],

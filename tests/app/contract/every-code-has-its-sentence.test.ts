@@ -60,7 +60,7 @@ test.each<[Remedy, string]>([
   [{ kind: 'lower-target', conversion: 0.93, time }, 'A target of 93 % conversion takes 6.5 h.'],
   [
     { kind: 'less-inhibition', time },
-    'Were the product taken away as it forms, or an enzyme chosen that it does not inhibit, the target takes 6.5 h.',
+    'With half the inhibition (product taken away as it forms, or another enzyme) the target takes 6.5 h.',
   ],
   [{ kind: 'better-pH', pH: 6.65, time }, 'At pH 6.65 the target takes 6.5 h.'],
   [

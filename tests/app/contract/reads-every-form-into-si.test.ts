@@ -86,6 +86,7 @@ test('phases with all that they may hold', () => {
     [
       'programme.phases',
       [
+        { phase: 'heat', to: '20 degC' },
         { phase: 'hold', for: '15 s' },
         { phase: 'heat', to: '42 degC', jacket: { temperature: '60 degC', timeConstant: '25 min' } },
         { phase: 'adjust', pH: 6.5 },
@@ -110,6 +111,7 @@ test('phases with all that they may hold', () => {
     start: { temperature: 283.15, pH: 6.7 },
     countDoseVolume: true,
     phases: [
+      { phase: 'heat', to: 293.15 },
       { phase: 'hold', for: 15 },
       { phase: 'heat', to: 315.15, jacket: { temperature: 333.15, timeConstant: 1500 } },
       { phase: 'adjust', pH: 6.5 },

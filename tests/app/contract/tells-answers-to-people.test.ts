@@ -26,7 +26,7 @@ What would help:
 
 After the kill step 1.2 % of the enzyme charged is active; the step takes it down by 1.9 powers of ten.
 
-Check by step-by-step integration in logarithms, explicit: the two agree to 1e-10 of the value. About 4 digits are good.
+Check by step-by-step integration, explicit: the two agree to 1e-10 of the value. About 4 digits are good.
 
 Warning: After the kill step 1.2 % of the enzyme charged is still active.
 

@@ -26,7 +26,7 @@ test('every part in the units of the format', () => {
       volume: { unit: 'm3', values: [12, 12] },
       conversion: { unit: '1', values: [0, 0.3822] },
     },
-    check: { method: 'ode-log-explicit', relativeDifference: 1.3e-10 },
+    check: { method: 'ode-explicit', relativeDifference: 1.3e-10 },
     hours: {
       total: { value: 9.412, unit: 'h' },
       sentence:
@@ -108,6 +108,6 @@ test('a number that is not finite is a bug of the engine and never written', () 
 })
 
 test('a check that gave up is null', () => {
-  const check = { method: 'ode-log-implicit', relativeDifference: null } as const
+  const check = { method: 'ode-implicit', relativeDifference: null } as const
   expect(writeAnswer({ ...fullAnswer, check }, asked).check).toEqual(check)
 })
