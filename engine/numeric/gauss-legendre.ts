@@ -37,11 +37,3 @@ export function gaussLegendre(n: number): Quadrature {
 
 /** The rule of 16 points. */
 export const gauss16 = gaussLegendre(16)
-
-/** Integral of f over [a, b] by one panel of the rule. */
-export function integral(f: (x: number) => number, a: number, b: number, rule: Quadrature = gauss16): number {
-  const { nodes, weights } = rule
-  let sum = 0
-  for (let i = 0; i < nodes.length; i++) sum += (weights[i] as number) * f(a + (b - a) * (nodes[i] as number))
-  return (b - a) * sum
-}

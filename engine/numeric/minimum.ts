@@ -112,9 +112,8 @@ function stationaryPoint(f: (x: number) => number, centre: number, r: number): n
     c.push((2 / (degree + 1)) * sum)
   }
   const largest = Math.max(...c.slice(1).map(Math.abs))
-  if (!(Math.abs(c[degree] as number) + Math.abs(c[degree - 1] as number) < 1e-9 * largest)) {
-    if (!(Math.abs(c[degree] as number) < 1e-4 * largest)) return null
-  }
+  // The last term says whether a polynomial of this degree follows f here.
+  if (!(Math.abs(c[degree] as number) < 1e-4 * largest)) return null
   const slope = (s: number): { value: number; curvature: number } => {
     // T_k' = k·U_(k−1), T_k'' from (s² − 1)U_(k−1)' = k·T_k − s·U_(k−1).
     let value = 0

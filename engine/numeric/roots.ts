@@ -45,7 +45,7 @@ export function increasingRoot(
  * Root of a continuous function between two points of opposite sign.
  *
  * Shapes   `atLow`, `atHigh` are f there, if already known.
- * Fails    returns NaN-free: the end nearer to zero when the signs agree.
+ * Fails    never: where the signs agree it returns the end nearer to zero.
  * Source   Brent 1973, Algorithms for Minimization without Derivatives, chapter 4.
  */
 export function bracketedRoot(

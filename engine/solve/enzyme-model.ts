@@ -8,7 +8,13 @@ import { EaFromQ10 } from '../kinetics/q10.ts'
 import type { RateConstants } from '../kinetics/rate-law.ts'
 import { activeShare } from '../kinetics/reversible-loss.ts'
 import type { Conditions, Enzyme, EnzymeRate, Feed, InactivationStep, PhEffect } from '../scenario.ts'
-import { type MolarEnergy, quantity, type SpecificRate, type Temperature } from '../units/quantity.ts'
+import {
+  type Density,
+  type MolarEnergy,
+  quantity,
+  type SpecificRate,
+  type Temperature,
+} from '../units/quantity.ts'
 import { ionisationRatio } from './ionisation-ratio.ts'
 
 /** No constant is let above this, 1/s: products with amounts and times stay within the range of doubles. */
@@ -101,13 +107,14 @@ function specificRate(enzyme: Enzyme, feed: Feed): SpecificRate {
   if (!activity || molarMass === undefined)
     throw new Error('an activity without molar mass passed validation')
   const { declared, assay } = activity
-  if (declared.per === 'volume' && enzyme.density === undefined)
-    throw new Error('an activity per volume without density passed validation')
   const perMass =
-    declared.per === 'mass'
-      ? declared.value
-      : activityPerMass(declared.value, enzyme.density ?? quantity<never>(Number.NaN))
+    declared.per === 'mass' ? declared.value : activityPerMass(declared.value, densityOf(enzyme))
   return specificRateFromActivity(perMass, molarMass, Km, assay.substrate)
+}
+
+function densityOf({ density }: Enzyme): Density {
+  if (density === undefined) throw new Error('an activity per volume without density passed validation')
+  return density
 }
 
 /** Rate at a pH over the one at the pH of measurement. */

@@ -1,6 +1,6 @@
 /** The same scenario with one thing changed: what remedies, optima and the hours ledger compare. */
 import type { Phase, Programme, Scenario } from '../scenario.ts'
-import { type Concentration, type Mass, quantity, type Temperature } from '../units/quantity.ts'
+import { type Concentration, type Mass, quantity, type Temperature, type Time } from '../units/quantity.ts'
 
 /**
  * The temperature at which the reaction is meant to run: of a phased programme the one held longest, kill steps
@@ -67,7 +67,7 @@ export function steadyAt(
   if (programme.kind === 'constant') return scenario
   const phases: Phase[] = programme.phases.map((phase, index) => {
     if (phase.phase !== 'heat' && phase.phase !== 'cool' && phase.phase !== 'inactivate') return phase
-    return { phase: 'hold', for: quantity<never>(durations.get(index) ?? 0) }
+    return { phase: 'hold', for: quantity<Time>(durations.get(index) ?? 0) }
   })
   return { ...scenario, programme: { ...programme, start: { ...programme.start, temperature: T }, phases } }
 }
