@@ -45,7 +45,11 @@ export function doseScaleFor(
   return searchScale(solver.answers, conversion, until, endless)
 }
 
-/** The root over ln scale of what is still unconverted at the moment against the target. */
+/**
+ * The root over ln scale of how far the batch falls short: what is still unconverted at the moment against the
+ * target, or, once the target is reached in time, the time it took against the time it had. (A hold that waits for
+ * the very target makes the conversion at the end the same for every larger dose.)
+ */
 function searchScale(
   route: Route,
   conversion: number,
@@ -59,15 +63,23 @@ function searchScale(
   const spend = budget(steps)
   const short = (logScale: number): number => {
     if (failure) return Number.NaN
-    const run = route({ doseScale: Math.exp(logScale), until, endless })
+    const run = route({
+      doseScale: Math.exp(logScale),
+      until,
+      endless,
+      ...(until < Number.POSITIVE_INFINITY && { target: conversion }),
+    })
     spend.left -= stepsOf(run)
     if (spend.left < 0) failure = overspent(steps)
     if (!run.ok) {
       failure ??= run.failure
       return Number.NaN
     }
-    highest = Math.max(highest, run.value.end.conversion)
-    return Math.log(Math.max(1e-300, 1 - run.value.end.conversion) / (1 - conversion))
+    const { reachedAt, firstDoseAt, end } = run.value
+    highest = Math.max(highest, end.conversion)
+    if (reachedAt !== undefined)
+      return Math.min(-1e-300, Math.log(Math.max(1e-300, (reachedAt - firstDoseAt) / (until - firstDoseAt))))
+    return Math.log(Math.max(1e-300, 1 - end.conversion) / (1 - conversion))
   }
   let low = Math.log(start)
   let atLow = short(low)
