@@ -11,7 +11,7 @@ export interface Budget {
 export const budget = (steps: number): Budget => ({ left: steps })
 
 /** A run that failed without having counted its steps is taken to have cost this many. */
-const unknown = 1000
+const unknown = 10_000
 
 /** Steps that a run has taken, rejected ones included. */
 export const stepsOf = (run: Outcome<BatchRun, RouteFailure>): number =>

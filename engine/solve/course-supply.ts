@@ -77,6 +77,7 @@ export class CourseSupply {
     course: TemperatureCourse,
     length: number,
     room: CourseWorkspace,
+    mostCells: number,
   ) {
     this.room = room
     this.constants = constants
@@ -86,7 +87,7 @@ export class CourseSupply {
     const to = temperatureAt(course, length)
     const steepest = Math.max(steepness.rate, steepness.inactivation)
     const span = (steepest * Math.abs(to - from)) / (from * to)
-    this.cells = Math.min(4000, Math.max(1, Math.ceil(span / cellSpan)))
+    this.cells = Math.min(mostCells, Math.max(1, Math.ceil(span / cellSpan)))
     this.temperatureStep = (to - from) / this.cells
     this.next()
   }

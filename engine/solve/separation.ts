@@ -65,6 +65,7 @@ class SeparationMover implements Mover {
   private readonly batch: Batch
   private readonly path: ReactionPath
   private readonly room: CourseWorkspace
+  private readonly mostCells: number
   private readonly residual: SteadyConstants['residual']
   private forms: EnzymeForms = { native: 0, intermediate: 0, final: 0 }
   /** The coordinate that `supplied` comes to, once it has been sought. */
@@ -78,6 +79,7 @@ class SeparationMover implements Mover {
     this.batch = batch
     this.path = path
     this.room = room
+    this.mostCells = mostCellsOf(batch)
     this.residual = batch.model.inactivation?.residual ?? { first: 0, second: 0 }
   }
 
@@ -169,7 +171,7 @@ class SeparationMover implements Mover {
     const { model } = this.batch
     const constants = { k: model.k(run.pH), k1: model.inactivation?.k1(run.pH) }
     const E = this.forms.native
-    const supply = new CourseSupply(constants, model.steepness, run.course, length, this.room)
+    const supply = new CourseSupply(constants, model.steepness, run.course, length, this.room, this.mostCells)
     const stop = due <= 0 ? 0 : due < Number.POSITIVE_INFINITY ? supply.timeFor(due / E) : null
     const stopped = stop !== null
     const elapsed = stopped ? stop : length
@@ -178,7 +180,7 @@ class SeparationMover implements Mover {
     // The course is passed once more for the times wanted: cells that lie behind are not kept.
     const again =
       outputs.length > 0
-        ? new CourseSupply(constants, model.steepness, run.course, length, courseWorkspace())
+        ? new CourseSupply(constants, model.steepness, run.course, length, courseWorkspace(), this.mostCells)
         : supply
     const states = this.outputsOf(run, elapsed, outputs, (τ) => ({
       supplied: E * again.suppliedUntil(τ),
@@ -248,3 +250,11 @@ class SeparationMover implements Mover {
 }
 
 const noStates: readonly BatchState[] = []
+
+/** Cells that all moving courses of a batch may be cut into together; ordinary ramps take ten each. */
+const allCells = 8000
+
+const mostCellsOf = ({ timeline }: Batch): number => {
+  const moving = timeline.steps.filter((step) => step.kind === 'run' && step.course.kind !== 'steady').length
+  return Math.max(32, Math.min(1000, Math.floor(allCells / Math.max(1, moving))))
+}
