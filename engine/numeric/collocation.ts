@@ -10,7 +10,10 @@ import { gauss16 } from './gauss-legendre.ts'
 /** Number of nodes. */
 export const order = 16
 
-/** Running integral of the interpolant at node i from the values at nodes j: order × order, row by row. */
+/** The nodes lie symmetrically: what is even and what is odd about the middle are summed apart, over half of them. */
+const half = order / 2
+
+/** Running integral at node i < half from even and odd sums of values: half × half, row by row, the two alternating. */
 const toNodes = integrationMatrix()
 
 /** P_k at node j, k by k. */
@@ -32,27 +35,42 @@ function legendreAtNodes(): Float64Array[] {
 
 function integrationMatrix(): Float64Array {
   const P = legendreAtNodes()
-  const matrix = new Float64Array(order * order)
+  const matrix = new Float64Array(2 * half * half)
   const at = (k: number, i: number): number => (P[k] as Float64Array)[i] as number
-  for (let i = 0; i < order; i++) {
-    const x = 2 * (gauss16.nodes[i] as number) - 1
-    for (let j = 0; j < order; j++) {
-      let sum = 0.5 * (1 + x)
-      for (let k = 1; k < order; k++) sum += 0.5 * at(k, j) * (at(k + 1, i) - at(k - 1, i))
-      matrix[i * order + j] = (gauss16.weights[j] as number) * sum
+  const toNode = (i: number, j: number): number => {
+    let sum = gauss16.nodes[i] as number
+    for (let k = 1; k < order; k++) sum += 0.5 * at(k, j) * (at(k + 1, i) - at(k - 1, i))
+    return (gauss16.weights[j] as number) * sum
+  }
+  for (let i = 0; i < half; i++) {
+    for (let j = 0; j < half; j++) {
+      const near = toNode(i, j)
+      const far = toNode(i, order - 1 - j)
+      matrix[2 * (i * half + j)] = 0.5 * (near + far)
+      matrix[2 * (i * half + j) + 1] = 0.5 * (near - far)
     }
   }
   return matrix
 }
 
-/** Fills `running` with ∫_0^node of the interpolant of `values`, on [0, 1]. */
-export function integrateToNodesInto(running: Float64Array, values: Float64Array): void {
-  for (let i = 0; i < order; i++) {
-    let sum = 0
-    const row = i * order
-    for (let j = 0; j < order; j++) sum += (toNodes[row + j] as number) * (values[j] as number)
-    running[i] = sum
+/** Fills `running` with ∫_0^node of the interpolant of `values`, on [0, 1]; returns ∫_0^1. */
+export function integrateToNodesInto(running: Float64Array, values: Float64Array): number {
+  const whole = integrateWhole(values)
+  for (let i = 0; i < half; i++) {
+    let even = 0
+    let odd = 0
+    let entry = 2 * i * half
+    for (let j = 0; j < half; j++) {
+      const near = values[j] as number
+      const far = values[order - 1 - j] as number
+      even += (toNodes[entry] as number) * (near + far)
+      odd += (toNodes[entry + 1] as number) * (near - far)
+      entry += 2
+    }
+    running[i] = odd + even
+    running[order - 1 - i] = odd - even + whole
   }
+  return whole
 }
 
 /** ∫_0^1 of the interpolant of `values`. */
@@ -62,26 +80,33 @@ export function integrateWhole(values: Float64Array): number {
   return sum
 }
 
-/** Legendre coefficient k from the values at nodes j: order × order, row by row. */
+/** Legendre coefficient k from even (k even) or odd sums of values: order × half, row by row. */
 const toSeries = seriesMatrix()
 
 function seriesMatrix(): Float64Array {
   const P = legendreAtNodes()
-  const matrix = new Float64Array(order * order)
+  const matrix = new Float64Array(order * half)
   for (let k = 0; k < order; k++)
-    for (let j = 0; j < order; j++)
-      matrix[k * order + j] =
+    for (let j = 0; j < half; j++)
+      matrix[k * half + j] =
         (2 * k + 1) * (gauss16.weights[j] as number) * ((P[k] as Float64Array)[j] as number)
   return matrix
 }
 
 /** Fills `coefficients` with those of the interpolant in Legendre polynomials of 2x − 1. */
 export function legendreCoefficientsInto(coefficients: Float64Array, values: Float64Array): void {
-  for (let k = 0; k < order; k++) {
-    let sum = 0
-    const row = k * order
-    for (let j = 0; j < order; j++) sum += (toSeries[row + j] as number) * (values[j] as number)
-    coefficients[k] = sum
+  for (let k = 0; k < order; k += 2) {
+    let even = 0
+    let odd = 0
+    const row = k * half
+    for (let j = 0; j < half; j++) {
+      const near = values[j] as number
+      const far = values[order - 1 - j] as number
+      even += (toSeries[row + j] as number) * (near + far)
+      odd += (toSeries[row + half + j] as number) * (near - far)
+    }
+    coefficients[k] = even
+    coefficients[k + 1] = odd
   }
 }
 

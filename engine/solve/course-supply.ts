@@ -220,10 +220,9 @@ export class CourseSupply {
         loss[i] = k1(T)
         rate[i] = k(T)
       }
-      integrateToNodesInto(running, loss)
+      this.lostWithin = width * integrateToNodesInto(running, loss)
       for (let i = 0; i < order; i++)
         rate[i] = (rate[i] as number) * left(this.lostBefore + width * (running[i] as number))
-      this.lostWithin = width * integrateWhole(loss)
     }
     this.suppliedWithin = width * integrateWhole(rate)
   }

@@ -23,7 +23,8 @@ export function fractionPath(law: RateConstants, charge: Charge, slow: SlowFract
   const { relativeRate } = slow
   const substrate = (u: number): number => fast0 * Math.exp(-u) + slow0 * Math.exp(-relativeRate * u)
   const consumed = (u: number): number => -fast0 * Math.expm1(-u) - slow0 * Math.expm1(-relativeRate * u)
-  const demandSlope = (u: number): number => resistance(law, substrate(u), P0 + massYield * consumed(u))
+  const demandSlopeAt = (S: number): number => resistance(law, S, P0 + massYield * (S0 - S))
+  const demandSlope = (u: number): number => demandSlopeAt(substrate(u))
   const demand = (u: number): number => {
     const first = fast0 * decayed(1, u) + slow0 * decayed(relativeRate, u)
     let sum = Km * u + first
@@ -54,5 +55,5 @@ export function fractionPath(law: RateConstants, charge: Charge, slow: SlowFract
       -Math.log1p(-conversion),
     )
   }
-  return { demand, demandSlope, substrate, consumed, coordinate, restingConversion: 1 }
+  return { demand, demandSlope, demandSlopeAt, substrate, consumed, coordinate, restingConversion: 1 }
 }

@@ -9,6 +9,8 @@ import { integrateToNodesInto, integrateWhole, order } from '../numeric/collocat
 import { gauss16 } from '../numeric/gauss-legendre.ts'
 import type { ReactionPath } from './reaction-path.ts'
 
+const { nodes, weights } = gauss16
+
 /** A panel this wide in u keeps 16 nodes at round-off. */
 const panelWidth = 4
 /** A panel in which the enzyme falls below this share is halved: 1/E is then no longer smooth in it. */
@@ -21,64 +23,85 @@ export interface ProtectedDecay {
   readonly Kp: number
 }
 
-const slopes = (): Float64Array => new Float64Array(order)
+/** Values at the nodes of a panel, to be used again and again. */
+export interface ProtectedWorkspace {
+  readonly demand: Float64Array
+  readonly loss: Float64Array
+  readonly lost: Float64Array
+}
+
+/** Makes the room that `protectedTime` works in; making it costs as much as a whole answer. */
+export const protectedWorkspace = (): ProtectedWorkspace => ({
+  demand: new Float64Array(order),
+  loss: new Float64Array(order),
+  lost: new Float64Array(order),
+})
 
 /**
  * Enzyme lost on the way to u, kg/m³: below this dose u is never reached.
  */
 export function protectedLoss(path: ReactionPath, decay: ProtectedDecay, u: number): number {
-  const loss = slopes()
+  const room = protectedWorkspace()
   let sum = 0
   for (let low = 0; low < u; low += panelWidth) {
     const width = Math.min(panelWidth, u - low)
-    for (let i = 0; i < order; i++)
-      loss[i] = lossSlope(path, decay, low + width * (gauss16.nodes[i] as number))
-    sum += width * integrateWhole(loss)
+    slopesInto(room, path, decay, low, width)
+    sum += width * integrateWhole(room.loss)
   }
   return sum
 }
-
-const lossSlope = (path: ReactionPath, { k, kd, Kp }: ProtectedDecay, u: number): number =>
-  ((kd / k) * path.demandSlope(u)) / (1 + path.substrate(u) / Kp)
 
 /**
  * Time to u from a dose E0.
  *
  * Units    E0 kg/m³; returns s, Infinity where the enzyme is spent before.
  */
-export function protectedTime(path: ReactionPath, decay: ProtectedDecay, E0: number, u: number): number {
-  const { k, kd, Kp } = decay
-  const demand = slopes()
-  const loss = slopes()
-  const lost = slopes()
-  const ratio = kd / k
+export function protectedTime(
+  path: ReactionPath,
+  decay: ProtectedDecay,
+  E0: number,
+  u: number,
+  room: ProtectedWorkspace = protectedWorkspace(),
+): number {
+  const { demand, loss, lost } = room
   let E = E0
   let time = 0
   let low = 0
   let width = panelWidth
   while (low < u) {
     width = Math.min(width, u - low)
-    for (let i = 0; i < order; i++) {
-      const at = low + width * (gauss16.nodes[i] as number)
-      const slope = path.demandSlope(at)
-      demand[i] = slope
-      loss[i] = (ratio * slope) / (1 + path.substrate(at) / Kp)
-    }
-    const lostWithin = width * integrateWhole(loss)
+    slopesInto(room, path, decay, low, width)
+    const lostWithin = width * integrateToNodesInto(lost, loss)
     if (E - lostWithin < leastShare * E && width > 1e-12 * (1 + low)) {
       width *= 0.5
       continue
     }
     if (!(lostWithin < E)) return Number.POSITIVE_INFINITY
-    integrateToNodesInto(lost, loss)
     let sum = 0
     for (let i = 0; i < order; i++)
-      sum +=
-        ((gauss16.weights[i] as number) * (demand[i] as number)) / (k * (E - width * (lost[i] as number)))
-    time += width * sum
+      sum += ((weights[i] as number) * (demand[i] as number)) / (E - width * (lost[i] as number))
+    time += (width * sum) / decay.k
     E -= lostWithin
     low += width
     width *= 2
   }
   return time
+}
+
+/** Enzyme-time demanded, and enzyme lost, per u at the nodes of a panel. */
+function slopesInto(
+  { demand, loss }: ProtectedWorkspace,
+  path: ReactionPath,
+  { k, kd, Kp }: ProtectedDecay,
+  low: number,
+  width: number,
+): void {
+  const ratio = kd / k
+  const perKp = 1 / Kp
+  for (let i = 0; i < order; i++) {
+    const S = path.substrate(low + width * (nodes[i] as number))
+    const slope = path.demandSlopeAt(S)
+    demand[i] = slope
+    loss[i] = (ratio * slope) / (1 + S * perKp)
+  }
 }

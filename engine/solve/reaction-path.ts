@@ -3,7 +3,7 @@
  * with the enzyme-time: everything about the rate law that does not depend on when or how warm.
  */
 import { type Charge, enzymeTime, equilibriumSubstrate } from '../kinetics/integrated-rate-law.ts'
-import { type RateConstants, resistance } from '../kinetics/rate-law.ts'
+import type { RateConstants } from '../kinetics/rate-law.ts'
 import { increasingRoot, type ValueAndSlope } from '../numeric/roots.ts'
 import { fractionPath } from './fraction-path.ts'
 
@@ -12,6 +12,8 @@ export interface ReactionPath {
   readonly demand: (u: number) => number
   /** Its slope. */
   readonly demandSlope: (u: number) => number
+  /** Its slope where the substrate has come down to S kg/m³: the same without another exponential. */
+  readonly demandSlopeAt: (S: number) => number
   /** Substrate at u, kg/m³. */
   readonly substrate: (u: number) => number
   /** Substrate consumed up to u, kg/m³, with full relative precision from u = 0 on. */
@@ -40,9 +42,20 @@ function uniformPath(law: RateConstants, charge: Charge): ReactionPath {
   const reverse = law.Keq === undefined ? 1 : 1 + massYield / law.Keq
   const substrate = (u: number): number => equilibrium + span * Math.exp(-u)
   const consumed = (u: number): number => -span * Math.expm1(-u)
+  // The resistance with its reciprocals taken beforehand: quadrature asks for it 16 times a panel.
+  const { Km } = law
+  const perKic = law.Kic === undefined ? 0 : 1 / law.Kic
+  const perKiu = law.Kiu === undefined ? 0 : 1 / law.Kiu
+  const perKsi = law.Ksi === undefined ? 0 : 1 / law.Ksi
+  const perReverse = 1 / reverse
+  const demandSlopeAt = (S: number): number => {
+    const P = P0 + massYield * (S0 - S)
+    return (Km * (1 + P * perKic) + S * (1 + P * perKiu + S * perKsi)) * perReverse
+  }
   return {
     demand: (u) => enzymeTime(law, charge, u),
-    demandSlope: (u) => resistance(law, substrate(u), P0 + massYield * consumed(u)) / reverse,
+    demandSlope: (u) => demandSlopeAt(substrate(u)),
+    demandSlopeAt,
     substrate,
     consumed,
     coordinate: (conversion) => {

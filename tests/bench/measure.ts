@@ -13,6 +13,12 @@ export interface Measured {
   readonly errors: { readonly median: number; readonly p99: number; readonly worst: number }
 }
 
+/** So long each contender runs before it is timed, ns: the compiler has then done its work. */
+const warmUp = 400_000_000n
+/** So long all repeats of one contender take at least, ns, and so many there are at least. */
+const enough = 300_000_000
+const leastRepeats = 15
+
 /**
  * Medians over interleaved repeats, so that what disturbs the machine disturbs all contenders alike.
  *
@@ -22,13 +28,23 @@ export function measure(
   contenders: readonly Contender[],
   exact: Float64Array,
   condition?: Float64Array,
-  repeats = 15,
 ): Measured[] {
   const times = contenders.map(() => [] as number[])
+  let slowest = 0
   const results = contenders.map(({ run }) => {
-    run()
-    return run()
+    const start = process.hrtime.bigint()
+    let result = run()
+    let last = start
+    let now = process.hrtime.bigint()
+    while (now - start < warmUp) {
+      result = run()
+      last = now
+      now = process.hrtime.bigint()
+    }
+    slowest = Math.max(slowest, Number(now - last))
+    return result
   })
+  const repeats = Math.max(leastRepeats, Math.ceil(enough / slowest))
   for (let repeat = 0; repeat < repeats; repeat++)
     contenders.forEach(({ run }, i) => {
       const start = process.hrtime.bigint()
@@ -59,10 +75,18 @@ const short = (x: number): string => x.toExponential(1)
 export const duration = (ns: number): string =>
   ns < 1000 ? `${ns.toFixed(0)} ns` : `${(ns / 1000).toFixed(2)} µs`
 
-/** One line of the report. */
-export function report(label: string, measured: Measured, goal: string, met: boolean): void {
+const goals = { met: 0, missed: 0 }
+
+/** The last line of the report. */
+export function summary(): string {
+  return `${goals.met} goals met, ${goals.missed} missed`
+}
+
+/** One line of the report; without a `goal` it is there to compare with. */
+export function report(label: string, measured: Measured, goal?: { text: string; met: boolean }): void {
+  if (goal) goals[goal.met ? 'met' : 'missed']++
   const { median, p99, worst } = measured.errors
   console.log(
-    `${met ? 'meets ' : 'MISSES'} ${label.padEnd(52)} ${duration(measured.nanoseconds).padStart(9)}  ${goal.padEnd(28)} error median ${short(median)}, 99 % ${short(p99)}, worst ${short(worst)}`,
+    `${goal ? (goal.met ? 'meets ' : 'MISSES') : '      '} ${label.padEnd(52)} ${duration(measured.nanoseconds).padStart(9)}  ${(goal?.text ?? '').padEnd(22)} error median ${short(median)}, 99 % ${short(p99)}, worst ${short(worst)}`,
   )
 }

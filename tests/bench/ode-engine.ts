@@ -82,7 +82,7 @@ function compare(
     )
     if (!engine || !inlined) continue
     const ratio = engine.nanoseconds / inlined.nanoseconds
-    report(`${label}, ${tolerance}`, engine, `${ratio.toFixed(2)}× (goal ≤ 2×)`, ratio <= 2)
-    report('   yardstick', inlined, '1×', true)
+    report(`${label}, ${tolerance}`, engine, { text: `${ratio.toFixed(2)}× (goal ≤ 2×)`, met: ratio <= 2 })
+    report('   yardstick', inlined)
   }
 }

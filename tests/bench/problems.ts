@@ -2,6 +2,7 @@
 import { enzymeTime } from '../../engine/kinetics/integrated-rate-law.ts'
 import type { Enzyme, Feed, Phase, Programme } from '../../engine/scenario.ts'
 import { enzymeModel } from '../../engine/solve/enzyme-model.ts'
+import { odeRoute } from '../../engine/solve/ode-route.ts'
 import type { Batch } from '../../engine/solve/route.ts'
 import { timeline } from '../../engine/solve/timeline.ts'
 import {
@@ -132,8 +133,9 @@ export function programmeCases(count: number): Case[] {
 /** Substrate fed in for two hours after an hour's hold. */
 export const feeding = { flow: 0.1 / 3600, duration: 2 * 3600, concentration: 150, before: 3600 }
 
+/** Only those whose enzyme lasts: an unreachable target is no matter for a race. */
 export function feedCases(count: number): Case[] {
-  return constantCases(count).map(({ dose, T }) => ({
+  const cases = constantCases(3 * count).map(({ dose, T }) => ({
     dose,
     T,
     batch: batchUnder({
@@ -153,4 +155,10 @@ export function feedCases(count: number): Case[] {
       countDoseVolume: false,
     }),
   }))
+  return cases
+    .filter(({ batch }) => {
+      const run = odeRoute(batch)({ doseScale: 1, target: conversion, endless: false })
+      return run.ok && run.value.reachedAt !== undefined
+    })
+    .slice(0, count)
 }

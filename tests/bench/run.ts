@@ -3,6 +3,7 @@
  * achieved. Times are medians of interleaved repeats; only the ratios are worth quoting.
  */
 import { closedForms } from './closed-forms.ts'
+import { summary } from './measure.ts'
 import { odeEngine } from './ode-engine.ts'
 import { againstScipy } from './scipy.ts'
 
@@ -10,3 +11,4 @@ console.log(`Node ${process.versions.node}, ${process.platform} ${process.arch}\
 closedForms()
 odeEngine()
 await againstScipy()
+console.log(summary())
