@@ -13,11 +13,13 @@ import {
   workOf,
 } from './answers.ts'
 import { checkedScale, doseScaleFor, leastDoseScale } from './dose.ts'
+import { equilibriumBefore } from './equilibrium.ts'
 import { hoursLedger } from './hours.ts'
 import { amplification, honestDigits, reach } from './reach.ts'
 import { reachabilityRemedies, shorteningRemedies } from './remedies.ts'
 import type { RouteFailure } from './route.ts'
 import { type Solver, solverOf } from './solver.ts'
+import { withoutInactivation } from './variants.ts'
 
 /** Answers `find: dose`; the time counts from the first dose and ends with the programme at the latest. */
 export function findDose(
@@ -35,13 +37,16 @@ export function findDose(
   const warnings: Warning[] = [...conditionWarnings(scenario)]
   if (found.value.kind === 'none') {
     const { limit } = found.value
-    warnings.push({ code: 'beyond-equilibrium', equilibriumConversion: limit })
-    const ended = solver.checks({ doseScale: 1, endless: false, until })
+    const equilibriumConversion = equilibriumBefore(solver.batch, conversion)
+    if (equilibriumConversion !== undefined)
+      warnings.push({ code: 'beyond-equilibrium', equilibriumConversion })
+    // A stable enzyme comes to the same equilibrium, by steps as by the closed form.
+    const ended = solverOf(withoutInactivation(scenario)).checks({ doseScale: 1, endless: true })
     return success({
       reachable: false,
       limitingConversion: limit,
       ...leastDose,
-      check: checkOf(solver, limit, ended.ok ? limit : null),
+      check: checkOf(solver, limit, ended.ok ? ended.value.end.conversion : null),
       remedies: reachabilityRemedies(scenario, solver, conversion),
       work: ended.ok
         ? ended.value.work
