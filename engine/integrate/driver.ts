@@ -3,7 +3,7 @@ import { allFinite, firstNotFinite } from './finite.ts'
 import { firstStep } from './first-step.ts'
 import { locate } from './locate.ts'
 import type { Method } from './method.ts'
-import type { Arrival, Control, IntegrationFailure, Problem } from './problem.ts'
+import type { Arrival, Control, IntegrationFailure, Problem, RateInto } from './problem.ts'
 import { growth, LEAST_LOG_ERROR, shrinkage } from './step-size.ts'
 import { createStiffnessWatch } from './stiffness.ts'
 
@@ -43,6 +43,40 @@ export const createDriver = (size: number): Drive => {
   const trialRate = new Float64Array(size)
   const stiffness = createStiffnessWatch()
 
+  /** What the driver evaluated itself, and what a method no longer in use had evaluated. */
+  const spent = { evaluations: 0, jacobians: 0 }
+
+  // The loop below keeps its numbers to itself: those that a function inside it could see would live on the heap.
+  const arrival = (
+    time: number,
+    state: Float64Array,
+    event: boolean,
+    outputs: Float64Array,
+    outputsReached: number,
+    nextStep: number,
+    stepsAccepted: number,
+    stepsRejected: number,
+    method: Method,
+  ) => {
+    const rateEvaluations = spent.evaluations + method.rateEvaluations
+    const jacobians = spent.jacobians + method.jacobians
+    const work = { stepsAccepted, stepsRejected, rateEvaluations, jacobians }
+    return success({ time, state: state.slice(), event, outputs, outputsReached, nextStep, work })
+  }
+  const retire = (method: Method): void => {
+    spent.evaluations += method.rateEvaluations
+    spent.jacobians += method.jacobians
+  }
+  const notFinite = (rate: RateInto, method: Method, t: number, h: number) => {
+    // The component that stops being finite where the step was to lead.
+    for (let i = 0; i < size; i++) scratch[i] = (y[i] as number) + h * (f[i] as number)
+    rate(trialRate, scratch, t + h)
+    const ahead = firstNotFinite(trialRate)
+    const component = ahead >= 0 ? ahead : Math.max(firstNotFinite(method.next), 0)
+    const reached = { time: t, state: y.slice() }
+    return failed({ kind: 'rate-not-finite', time: t + h, component, reached } as const)
+  }
+
   return (problem, control, explicit, implicit) => {
     const { rate, start, end, event = NEVER } = problem
     const { relative, absolute, maxSteps } = control
@@ -53,60 +87,30 @@ export const createDriver = (size: number): Drive => {
     method.adopt(rate, relative, absolute)
     stiffness.reset()
     for (let i = 0; i < size; i++) y[i] = problem.initial[i] as number
+    spent.evaluations = 0
+    spent.jacobians = 0
     let t = start
     let row = 0
     let step = 0
     let accepted = 0
     let rejected = 0
-    // What the driver evaluates itself, and what a method no longer in use has evaluated.
-    let evaluations = 0
-    let jacobians = 0
-
-    const arrive = (time: number, state: Float64Array, atEvent: boolean) =>
-      success({
-        time,
-        state: state.slice(),
-        event: atEvent,
-        outputs: rows,
-        outputsReached: row,
-        nextStep: step,
-        work: {
-          stepsAccepted: accepted,
-          stepsRejected: rejected,
-          rateEvaluations: evaluations + method.rateEvaluations,
-          jacobians: jacobians + method.jacobians,
-        },
-      })
-    const change = (to: Method) => {
-      evaluations += method.rateEvaluations
-      jacobians += method.jacobians
-      method = to
-      method.adopt(rate, relative, absolute)
-    }
-    const reached = () => ({ time: t, state: y.slice() })
-    const notFinite = (h: number) => {
-      // The component that stops being finite where the step was to lead.
-      for (let i = 0; i < size; i++) scratch[i] = (y[i] as number) + h * (f[i] as number)
-      rate(trialRate, scratch, t + h)
-      const ahead = firstNotFinite(trialRate)
-      const component = ahead >= 0 ? ahead : Math.max(firstNotFinite(method.next), 0)
-      return failed({ kind: 'rate-not-finite', time: t + h, component, reached: reached() } as const)
-    }
 
     let level = event(t, y)
     if (Number.isNaN(level)) throw new RangeError('the event is not a number at the start')
     while (row < times.length && (times[row] as number) <= t) rows.set(y, size * row++)
-    if (start === end || level <= 0) return arrive(t, y, level <= 0)
+    if (start === end || level <= 0)
+      return arrival(t, y, level <= 0, rows, row, step, accepted, rejected, method)
 
     rate(f, y, t)
-    evaluations++
+    spent.evaluations++
     if (!allFinite(f)) {
-      return failed({ kind: 'rate-not-finite', time: t, component: firstNotFinite(f), reached: reached() })
+      const reached = { time: t, state: y.slice() }
+      return failed({ kind: 'rate-not-finite', time: t, component: firstNotFinite(f), reached })
     }
     step = control.firstStep ?? 0
     if (!(step > 0)) {
       step = firstStep(rate, t, end - t, y, f, relative, absolute, method.exponent, scratch, trialRate)
-      evaluations++
+      spent.evaluations++
     }
 
     let logBefore = 0
@@ -117,24 +121,28 @@ export const createDriver = (size: number): Drive => {
     let tried = 0
     for (;;) {
       if (accepted + rejected >= maxSteps) {
-        return failed({ kind: 'too-many-steps', time: t, taken: accepted + rejected, reached: reached() })
+        const reached = { time: t, state: y.slice() }
+        return failed({ kind: 'too-many-steps', time: t, taken: accepted + rejected, reached })
       }
       const final = t + step * STRETCH >= end
       const h = final ? end - t : step
       const tNext = final ? end : t + h
       if (h <= SMALLEST_STEP * Math.abs(t)) {
-        if (retreats > 0) return notFinite(h)
-        return failed({ kind: 'step-too-small', time: t, reached: reached() })
+        if (retreats > 0) return notFinite(rate, method, t, h)
+        return failed({ kind: 'step-too-small', time: t, reached: { time: t, state: y.slice() } })
       }
 
-      const error = method.attempt(t, h, y, f)
+      const attempted = method.attempt(t, h, y, f)
+      const levelNext = attempted <= 1 ? event(tNext, method.next) : level
+      // An event without bottom there, or none, says as little of where it was passed as such a rate would.
+      const error = levelNext > Number.NEGATIVE_INFINITY ? attempted : Number.POSITIVE_INFINITY
       if (!(error <= 1)) {
         rejected++
         rejectedLast = true
         if (error < Number.POSITIVE_INFINITY) step = h * shrinkage(error, method.exponent)
         else {
           if (retreats === 0) retreatedFrom = h
-          if (++retreats > MOST_RETREATS) return notFinite(h)
+          if (++retreats > MOST_RETREATS) return notFinite(rate, method, t, h)
           step = h * RETREAT
         }
         continue
@@ -150,23 +158,22 @@ export const createDriver = (size: number): Drive => {
       logBefore = logError
       rejectedLast = false
 
-      const levelNext = event(tNext, next)
-      const stops = !(levelNext > 0)
+      const stops = levelNext <= 0
       if (stops || (row < times.length && (times[row] as number) <= tNext)) {
         method.settle()
-        let arrival = tNext
+        let reachedAt = tNext
         if (stops) {
           const theta = locate(event, method, t, h, level, levelNext, scratch)
-          if (theta < 1) arrival = t + theta * h
+          if (theta < 1) reachedAt = t + theta * h
         }
-        while (row < times.length && (times[row] as number) <= arrival) {
+        while (row < times.length && (times[row] as number) <= reachedAt) {
           const due = times[row] as number
           method.at(due === tNext ? 1 : (due - t) / h, trialRate)
           rows.set(trialRate, size * row++)
         }
-        if (stops) return arrive(arrival, scratch, true)
+        if (stops) return arrival(reachedAt, scratch, true, rows, row, step, accepted, rejected, method)
       }
-      if (final) return arrive(end, next, false)
+      if (final) return arrival(end, next, false, rows, row, step, accepted, rejected, method)
 
       if (h >= retreatedFrom) {
         retreats = 0
@@ -182,11 +189,17 @@ export const createDriver = (size: number): Drive => {
       if (automatic && method === explicit) {
         if (stiffness.due(accepted) && stiffness.confirms(method.strain())) {
           stepBefore = step
-          change(implicit())
+          retire(method)
+          method = implicit()
+          method.adopt(rate, relative, absolute)
         }
       } else if (automatic && ++tried === TRIAL) {
         automatic = false
-        if (step < stepBefore) change(explicit)
+        if (step < stepBefore) {
+          retire(method)
+          method = explicit
+          method.adopt(rate, relative, absolute)
+        }
       }
     }
   }

@@ -193,10 +193,8 @@ const groups: readonly { readonly name: string; readonly lines: readonly Asked[]
     lines: load('product_inhibition').cases.flatMap((one) => {
       const batch = inhibitionBatch(one)
       const { kcat, E } = one.inputs
-      // A rate that is constant in logarithms leads the checking route past every event at once.
-      const times = one.id === 'competitive-linear-degenerate' ? [] : one.expected.time_to_conversion
       return [
-        ...times.map(({ X, t, limiting_conversion: limit }) =>
+        ...one.expected.time_to_conversion.map(({ X, t, limiting_conversion: limit }) =>
           timeAsked(one.id, batch, X, {
             ...(t !== undefined && { t }),
             ...(limit !== undefined && { limit }),

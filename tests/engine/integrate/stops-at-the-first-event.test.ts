@@ -25,6 +25,27 @@ test.each([
   expect(Math.abs((arrival.state[0] as number) - level)).toBeLessThan(4e-16)
 })
 
+test.each(['automatic', 'explicit', 'implicit'] as const)(
+  'an event without bottom is met though a step may pass it by ages (%s)',
+  (method) => {
+    // Source: closed form; the logarithm falls at a constant rate, so nothing but the event limits a step.
+    const at = (3.7 - Math.log(20)) / 1.67e-4
+    const problem: Problem = {
+      rate: (out) => {
+        out[0] = -1.67e-4
+        out[1] = 0
+      },
+      start: 0,
+      end: 1e8,
+      initial: Float64Array.of(3.7, -3),
+      event: (_t, y) => Math.log(Math.exp(y[0] as number) / 20),
+    }
+    const arrival = expectArrival(integrate(problem, { ...control, method }))
+    expect(arrival.event).toBe(true)
+    expect(Math.abs(arrival.time / at - 1)).toBeLessThan(1e-14)
+  },
+)
+
 test('an oscillation stops at its first zero, not at a later one', () => {
   const arrival = expectArrival(
     integrate(

@@ -61,8 +61,6 @@ describe.each(ways)('inhibited and reversible batches run as their closed form, 
     const asked = times.filter(
       ({ X, limiting_conversion }) => way === separation || X !== limiting_conversion,
     )
-    // A rate that is constant in logarithms leads a step past every event at once.
-    if (way !== separation && one.id === 'competitive-linear-degenerate') asked.length = 0
     counted.hold(one.id, [
       ...compareTimes(
         way,
