@@ -34,34 +34,31 @@ const STABILITY_LIMIT = 6.459
  *          ("Practical error estimation", Richardson extrapolation).
  */
 export const createDoubling = (size: number): Method => {
-  const idle: RateInto = () => {}
-  const whole = rk4(new Float64Array(size), idle, 0, 0)
-  const half = rk4(new Float64Array(size), idle, 0, 0)
   const from = new Float64Array(size)
   const fromRate = new Float64Array(size)
   const middle = new Float64Array(size)
   const middleRate = new Float64Array(size)
   const next = new Float64Array(size)
   const nextRate = new Float64Array(size)
-  let rate = idle
+  let rate: RateInto = () => {}
   let relative = 0
   let absolute = 0
   let time = 0
   let length = 0
 
-  // The rate at the start of the step is known: both first stages take it from here,
-  // and then hand the stepper over to the real rate.
-  const replay: RateInto = (out) => {
-    for (let i = 0; i < size; i++) out[i] = fromRate[i] as number
-    whole.deriv = rate
-    half.deriv = rate
+  // A first stage whose rate is known already takes it from there. One function for all stages: the stepper's
+  // calls then always meet the same one, and are compiled into it.
+  let known: Float64Array | undefined
+  const stage: RateInto = (out, y, t) => {
+    if (known === undefined) {
+      rate(out, y, t)
+      return
+    }
+    for (let i = 0; i < size; i++) out[i] = known[i] as number
+    known = undefined
   }
-  // The first stage of the second half step is the rate in the middle, wanted for the quintic.
-  const record: RateInto = (out, y, t) => {
-    rate(out, y, t)
-    for (let i = 0; i < size; i++) middleRate[i] = out[i] as number
-    half.deriv = rate
-  }
+  const whole = rk4(new Float64Array(size), stage, 0, 0)
+  const half = rk4(new Float64Array(size), stage, 0, 0)
 
   return {
     exponent: 1 / 5,
@@ -92,14 +89,15 @@ export const createDoubling = (size: number): Method => {
       length = h
       whole.t = t
       whole.dt = h
-      whole.deriv = replay
+      known = fromRate
       whole.step()
       half.t = t
       half.dt = 0.5 * h
-      half.deriv = replay
+      known = fromRate
       half.step()
       for (let i = 0; i < size; i++) middle[i] = fine[i] as number
-      half.deriv = record
+      rate(middleRate, middle, half.t)
+      known = middleRate
       half.step()
       this.rateEvaluations += 10
       let worst = 0

@@ -54,13 +54,13 @@ export function enzymeModel(enzyme: Enzyme, feed: Feed): EnzymeModel {
   const loss = temperature.reversibleLoss
   const lossRef = loss ? activeShare(loss.half, loss.energy, Tref) : 1
   const kNorm = kRef / lossRef
-  const k = (pH: number | undefined) => {
+  const k = latest((pH) => {
     const followed = phEffect && pH !== undefined && at.pH !== undefined
     const kHere = followed ? kNorm * rateRatio(phEffect, at.pH, pH) : kNorm
     const arrhenius = rateConstant(kHere, ea, Tref)
     if (!loss) return arrhenius
     return (T: number): number => arrhenius(T) * activeShare(loss.half, loss.energy, quantity<Temperature>(T))
-  }
+  })
   const constants: RateConstants = {
     Km: rate.Km,
     ...(rate.Kic !== undefined && { Kic: rate.Kic }),
@@ -121,6 +121,21 @@ function densityOf({ density }: Enzyme): Density {
 const rateRatio = (effect: PhEffect, measured: number, pH: number): number =>
   ionisationRatio('free' in effect ? effect.complex : effect, measured, pH)
 
+type OfTemperature = (T: number) => number
+
+/** Keeps the function of the pH asked for last: a programme asks for the same one run after run. */
+function latest(make: (pH: number | undefined) => OfTemperature): (pH: number | undefined) => OfTemperature {
+  let at: number | undefined
+  let made: OfTemperature | undefined
+  return (pH) => {
+    if (made === undefined || pH !== at) {
+      made = make(pH)
+      at = pH
+    }
+    return made
+  }
+}
+
 /** The rate constant as a function of temperature: Arrhenius' law, kept within the range of doubles. */
 function rateConstant(k: number, energyOverR: number, at: number): (T: number) => number {
   if (!(k > 0)) return () => 0
@@ -147,10 +162,10 @@ function inactivationModel(stated: NonNullable<Enzyme['inactivation']>): {
 } {
   const [first, second] = stated.steps
   const effect = stated.pH
-  const withPh =
-    ({ kd, ed, at }: { kd: number; ed: number; at: number }) =>
-    (pH: number | undefined) =>
-      rateConstant(effect && pH !== undefined ? kd * ionisationRatio(effect, pH, effect.at) : kd, ed, at)
+  const withPh = ({ kd, ed, at }: { kd: number; ed: number; at: number }) =>
+    latest((pH) =>
+      rateConstant(effect && pH !== undefined ? kd * ionisationRatio(effect, pH, effect.at) : kd, ed, at),
+    )
   const one = stepConstants(first)
   const two = second && stepConstants(second)
   return {

@@ -34,13 +34,20 @@ function movingRates(model: EnzymeModel, run: Run, start: ReactionStart): RateIn
   const linear = course.kind === 'linear'
   const from = course.from
   const slope = linear ? course.slope : 0
+  // Stages of a step come in twos and threes at the same time; the exponentials are kept for them.
+  const kept = Float64Array.of(Number.NaN, 0, 0)
   return (out, state, t) => {
+    if (t !== kept[0]) {
+      const T = linear ? from + slope * t : temperatureAt(course, t)
+      kept[0] = t
+      kept[1] = k(T)
+      if (kd) kept[2] = kd(T)
+    }
     const m = state[0] as number
     const E = state[1] as number
-    const T = linear ? from + slope * t : temperatureAt(course, t)
-    const drive = (k(T) * E) / (a + m * (b + c * m))
+    const drive = ((kept[1] as number) * E) / (a + m * (b + c * m))
     out[0] = m > 0 ? drive * (backward - reverse * m) : Number.NaN
-    out[1] = kd ? -kd(T) * E : 0
+    out[1] = -(kept[2] as number) * E
   }
 }
 
@@ -57,17 +64,20 @@ function fedRates(model: EnzymeModel, run: Run, start: ReactionStart): RateInto 
   const k = model.k(run.pH)(run.course.from) * E0
   const kd = model.inactivation ? model.inactivation.k1(run.pH)(run.course.from) : 0
   const poolIn = product + y * substrate
+  const substrateIn = substrate / m0
+  const enzymeIn = enzyme / E0
+  const perM0 = 1 / m0
   return (out, state, t) => {
     const m = (state[0] as number) * m0
     const E = state[1] as number
     const fed = t * (flow + 0.5 * flowSlope * t)
-    const V = V0 + fed
+    const perV = 1 / (V0 + fed)
     const rate = flow + flowSlope * t
-    const S = m / V
-    const P = (productPool + fed * poolIn) / V - y * S
+    const S = m * perV
+    const P = (productPool + fed * poolIn) * perV - y * S
     const D = Km * (1 + P * perKic) + S * (1 + P * perKiu) + S * S * perKsi
-    out[0] = m > 0 ? (rate * substrate - (k * E * (S - P * perKeq)) / D) / m0 : Number.NaN
-    out[1] = (rate * enzyme) / E0 - kd * E
+    out[0] = m > 0 ? rate * substrateIn - (k * E * (S - P * perKeq) * perM0) / D : Number.NaN
+    out[1] = rate * enzymeIn - kd * E
   }
 }
 
