@@ -62,7 +62,6 @@ export const createDoubling = (size: number): Method => {
 
   return {
     exponent: 1 / 5,
-    memory: 0,
     next,
     nextRate,
     rateEvaluations: 0,

@@ -67,11 +67,15 @@ export const createDriver = (size: number): Drive => {
     spent.evaluations += method.rateEvaluations
     spent.jacobians += method.jacobians
   }
-  const notFinite = (rate: RateInto, method: Method, t: number, h: number) => {
-    // The component that stops being finite where the step was to lead.
-    for (let i = 0; i < size; i++) scratch[i] = (y[i] as number) + h * (f[i] as number)
-    rate(trialRate, scratch, t + h)
-    const ahead = firstNotFinite(trialRate)
+  const notFinite = (rate: RateInto, method: Method, t: number, h: number, retreatedFrom: number) => {
+    // The component that stops being finite where the step was to lead, or a longer one before it.
+    let ahead = -1
+    for (let cuts = MOST_RETREATS; ahead < 0 && cuts >= 0; cuts--) {
+      const reach = retreatedFrom * RETREAT ** cuts
+      for (let i = 0; i < size; i++) scratch[i] = (y[i] as number) + reach * (f[i] as number)
+      rate(trialRate, scratch, t + reach)
+      ahead = firstNotFinite(trialRate)
+    }
     const component = ahead >= 0 ? ahead : Math.max(firstNotFinite(method.next), 0)
     const reached = { time: t, state: y.slice() }
     return failed({ kind: 'rate-not-finite', time: t + h, component, reached } as const)
@@ -114,6 +118,7 @@ export const createDriver = (size: number): Drive => {
     }
 
     let logBefore = 0
+    let hBefore = 0
     let retreats = 0
     let retreatedFrom = 0
     let rejectedLast = false
@@ -128,7 +133,7 @@ export const createDriver = (size: number): Drive => {
       const h = final ? end - t : step
       const tNext = final ? end : t + h
       if (h <= SMALLEST_STEP * Math.abs(t)) {
-        if (retreats > 0) return notFinite(rate, method, t, h)
+        if (retreats > 0) return notFinite(rate, method, t, h, retreatedFrom)
         return failed({ kind: 'step-too-small', time: t, reached: { time: t, state: y.slice() } })
       }
 
@@ -142,7 +147,7 @@ export const createDriver = (size: number): Drive => {
         if (error < Number.POSITIVE_INFINITY) step = h * shrinkage(error, method.exponent)
         else {
           if (retreats === 0) retreatedFrom = h
-          if (++retreats > MOST_RETREATS) return notFinite(rate, method, t, h)
+          if (++retreats > MOST_RETREATS) return notFinite(rate, method, t, h, retreatedFrom)
           step = h * RETREAT
         }
         continue
@@ -151,11 +156,12 @@ export const createDriver = (size: number): Drive => {
       accepted++
       const next = method.next
       const logError = error > 1e-4 ? Math.log(error) : LEAST_LOG_ERROR
-      let proposal = h * growth(logError, logBefore, method.exponent, method.memory)
+      let proposal = h * growth(logError, logBefore, hBefore > 0 ? h / hBefore : 0, method.exponent)
       if (rejectedLast && proposal > h) proposal = h
       // A step cut short by the end says nothing against the one that was to be taken.
       step = final && proposal < step ? step : proposal
       logBefore = logError
+      hBefore = h
       rejectedLast = false
 
       const stops = levelNext <= 0

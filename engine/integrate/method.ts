@@ -7,8 +7,6 @@ import type { RateInto } from './problem.ts'
 export interface Method {
   /** The estimated error of a step of length h shrinks like h^(1/exponent). */
   readonly exponent: number
-  /** Weight of the previous error in the step-size law; 0 for none. */
-  readonly memory: number
   /** State at the end of the latest attempt and, if that was good enough, the rate there. */
   readonly next: Float64Array
   readonly nextRate: Float64Array

@@ -32,8 +32,9 @@ export const createRosenbrock = (size: number): Method => {
   let rate: RateInto = () => {}
   let relative = 0
   let absolute = 0
-  // A step tried again after a rejection starts from the same point and keeps its Jacobian.
+  // A step tried again after a rejection starts from the same point and keeps its Jacobian, taken at this time.
   let time = Number.NaN
+  let start = 0
   let length = 0
 
   const combine = (weights: readonly number[], into: Float64Array, scale: number): void => {
@@ -64,13 +65,13 @@ export const createRosenbrock = (size: number): Method => {
     for (let s = 1; s < 5; s++) {
       at.set(from)
       combine(a[s] as readonly number[], at, 1)
-      rate(rateAt, at, time + (alpha[s] ?? 1) * h)
+      rate(rateAt, at, start + (alpha[s] ?? 1) * h)
       solveStage(s, h)
     }
     const fifth = stages[4] as Float64Array
     const sixth = stages[5] as Float64Array
     for (let i = 0; i < size; i++) at[i] = (at[i] as number) + (fifth[i] as number)
-    rate(rateAt, at, time + h)
+    rate(rateAt, at, start + h)
     solveStage(5, h)
     for (let i = 0; i < size; i++) result[i] = (at[i] as number) + (sixth[i] as number)
     return true
@@ -78,7 +79,6 @@ export const createRosenbrock = (size: number): Method => {
 
   return {
     exponent: 1 / 4,
-    memory: 0,
     next,
     nextRate,
     rateEvaluations: 0,
@@ -100,10 +100,12 @@ export const createRosenbrock = (size: number): Method => {
         this.rateEvaluations += 2 * size + 2
         from.set(y)
         fromRate.set(f)
-        time = t
+        start = t
       }
       length = h
       this.rateEvaluations += 5
+      // Differences over part of a step too long may be what was not finite: a shorter one takes its own.
+      time = Number.NaN
       if (!take(h, next)) return Number.POSITIVE_INFINITY
       const error = stages[5] as Float64Array
       let worst = 0
@@ -115,6 +117,7 @@ export const createRosenbrock = (size: number): Method => {
           worst = part
         }
       }
+      time = t
       if (!(worst <= 1)) return worst
       rate(nextRate, next, t + h)
       this.rateEvaluations += 1
