@@ -53,20 +53,29 @@ export function measure(
     })
   return contenders.map(({ name }, i) => {
     const sorted = (times[i] as number[]).sort((a, b) => a - b)
-    const errors = Float64Array.from(results[i] as Float64Array, (t, j) => {
-      const reference = exact[j] as number
-      return Math.abs(t - reference) / reference / Math.max(1, condition?.[j] ?? 1)
-    }).sort()
     return {
       name,
       nanoseconds: (sorted[sorted.length >> 1] as number) / exact.length,
-      errors: {
-        median: errors[errors.length >> 1] as number,
-        p99: errors[Math.floor(0.99 * errors.length)] as number,
-        worst: errors[errors.length - 1] as number,
-      },
+      errors: errorsOf(results[i] as Float64Array, exact, condition),
     }
   })
+}
+
+/** Relative errors, divided by `condition` where given. */
+export function errorsOf(
+  times: Float64Array,
+  exact: Float64Array,
+  condition?: Float64Array,
+): Measured['errors'] {
+  const errors = Float64Array.from(times, (t, j) => {
+    const reference = exact[j] as number
+    return Math.abs(t - reference) / reference / Math.max(1, condition?.[j] ?? 1)
+  }).sort()
+  return {
+    median: errors[errors.length >> 1] as number,
+    p99: errors[Math.floor(0.99 * errors.length)] as number,
+    worst: errors[errors.length - 1] as number,
+  }
 }
 
 const short = (x: number): string => x.toExponential(1)

@@ -10,5 +10,5 @@ import { againstScipy } from './scipy.ts'
 console.log(`Node ${process.versions.node}, ${process.platform} ${process.arch}\n`)
 closedForms()
 odeEngine()
-await againstScipy()
+againstScipy()
 console.log(summary())

@@ -39,8 +39,11 @@ const fed = dormandPrince({
   event: 's * (1 + flow * t) - (1 - X) * (supplied + flow * t * Sf)',
 })
 
-const kAt = (T: number): number => (k50 / 3600) * Math.exp((Ea * 1000 * (T - T50)) / (gas * T * T50))
-const kdAt = (T: number): number => (kd50 / 3600) * Math.exp((EaLoss * 1000 * (T - T50)) / (gas * T * T50))
+/** k at a temperature, 1/s. */
+export const kAt = (T: number): number => (k50 / 3600) * Math.exp((Ea * 1000 * (T - T50)) / (gas * T * T50))
+/** kd at a temperature, 1/s. */
+export const kdAt = (T: number): number =>
+  (kd50 / 3600) * Math.exp((EaLoss * 1000 * (T - T50)) / (gas * T * T50))
 
 /** Denominator a + b·S with the product written by balance, in a batch of S0 and no other substrate. */
 const denominator = (Km: number, pool: number): readonly [number, number] => [
