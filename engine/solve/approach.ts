@@ -35,6 +35,9 @@ export interface Stretch {
  * tolerances at worst, as the bench shows.
  */
 const stepShare = 2
+/** Time and enzyme, and substrate and enzyme, relative to the start. */
+const atStart = Float64Array.of(0, 1)
+const whole = Float64Array.of(1, 1)
 /** Below this share of its start the enzyme makes time too steep a function of conversion. */
 const spentEnzyme = 1e-3
 /** Below this share of its start plain substrate has too few digits. */
@@ -64,7 +67,7 @@ export function approachByReaction(
       rate: rates.rate,
       start: 0,
       end: u,
-      initial: Float64Array.of(0, 1),
+      initial: atStart,
       event: (_, y) => Math.min(last - (y[0] as number), (y[1] as number) - spentEnzyme),
     },
     {
@@ -99,24 +102,26 @@ export function approachInAmounts(
 ): Approach | undefined {
   const left = (y: ArrayLike<number>): number =>
     Math.min((y[0] as number) - spentSubstrate, (y[1] as number) - spentEnzyme)
+  const { rate, end, timeAt } = plainRates(model, run, start, length)
   const arrival = integrator.run(
     {
-      rate: plainRates(model, run, start),
+      rate,
       start: 0,
-      end: length,
-      initial: Float64Array.of(1, 1),
-      event: due ? (t, y) => Math.min(left(y), due(t, y[0] as number)) : (_, y) => left(y),
+      end,
+      initial: whole,
+      event: due ? (x, y) => Math.min(left(y), due(timeAt(x), y[0] as number)) : (_, y) => left(y),
     },
     {
       relative: stepShare * tolerance,
       absolute: 0.01 * stepShare * tolerance,
       maxSteps: mostSteps,
       method: 'explicit',
-      firstStep: length * Math.min(1, firstStepOf(tolerance)),
+      firstStep: end * Math.min(1, firstStepOf(tolerance)),
     },
   )
   if (!arrival.ok) return undefined
-  const { time: elapsed, state, event, work } = arrival.value
+  const { time: at, state, event, work } = arrival.value
+  const elapsed = event ? timeAt(at) : length
   const reached = event && due !== undefined && due(elapsed, state[0] as number) <= Math.max(0, left(state))
   return {
     elapsed,

@@ -12,12 +12,33 @@ import type { ReactionStart } from './reaction-rates.ts'
 import { temperatureAt } from './temperature-course.ts'
 import type { Run } from './timeline.ts'
 
-/** The rates of one run with a uniform substrate and one step of inactivation at most; t in s from the run's start. */
-export function plainRates(model: EnzymeModel, run: Run, start: ReactionStart): RateInto {
-  return run.feed ? fedRates(model, run, start) : movingRates(model, run, start)
+/** The rates of one run over a variable x that starts at 0, and the time that x stands for. */
+export interface PlainRates {
+  readonly rate: RateInto
+  /** x at the run's end. */
+  readonly end: number
+  /** s from the run's start */
+  readonly timeAt: (x: number) => number
 }
 
-function movingRates(model: EnzymeModel, run: Run, start: ReactionStart): RateInto {
+/** The rates of one run of `length` s, with a uniform substrate and one step of inactivation at most. */
+export function plainRates(model: EnzymeModel, run: Run, start: ReactionStart, length: number): PlainRates {
+  return run.feed
+    ? { rate: fedRates(model, run, start), end: length, timeAt: (t) => t }
+    : movingRates(model, run, start, length)
+}
+
+/** Change of ln √k over a run below which plain time is as good a variable. */
+const leastChange = 0.01
+/** …and above which the cold end would have no digits left. */
+const greatestChange = 10
+
+/**
+ * A batch that warms up or cools down, over x = (e^(βt) − 1)/(e^(βL) − 1) with e^(βL) the root of k at the end over
+ * k at the start: k·dt and kd·dt are then low powers of x, where over time both are steep exponentials. The root takes
+ * a fifth fewer rates than k itself or plain time.
+ */
+function movingRates(model: EnzymeModel, run: Run, start: ReactionStart, length: number): PlainRates {
   const { volume, substrate: m0, enzyme: E0, productPool } = start
   const { Km, Kic, Kiu, Ksi, Keq } = model.law(run.pH)
   const y = model.massYield
@@ -34,14 +55,22 @@ function movingRates(model: EnzymeModel, run: Run, start: ReactionStart): RateIn
   const linear = course.kind === 'linear'
   const from = course.from
   const slope = linear ? course.slope : 0
-  // Stages of a step come in twos and threes at the same time; the exponentials are kept for them.
+  const change = 0.5 * Math.log(k(temperatureAt(course, length)) / k(from))
+  const size = Math.abs(change)
+  const curved = size > leastChange && size < greatestChange
+  const growth = Math.expm1(change)
+  const perChange = length / change
+  const timeAt = (x: number): number => (curved ? perChange * Math.log1p(growth * x) : length * x)
+  // Stages of a step come in twos and threes at the same place; the exponentials are kept for them.
   const kept = Float64Array.of(Number.NaN, 0, 0)
-  return (out, state, t) => {
-    if (t !== kept[0]) {
+  const rate: RateInto = (out, state, x) => {
+    if (x !== kept[0]) {
+      const t = timeAt(x)
       const T = linear ? from + slope * t : temperatureAt(course, t)
-      kept[0] = t
-      kept[1] = k(T)
-      if (kd) kept[2] = kd(T)
+      const dt = curved ? (perChange * growth) / (1 + growth * x) : length
+      kept[0] = x
+      kept[1] = k(T) * dt
+      if (kd) kept[2] = kd(T) * dt
     }
     const m = state[0] as number
     const E = state[1] as number
@@ -49,8 +78,8 @@ function movingRates(model: EnzymeModel, run: Run, start: ReactionStart): RateIn
     out[0] = m > 0 ? drive * (backward - reverse * m) : Number.NaN
     out[1] = -(kept[2] as number) * E
   }
+  return { rate, end: 1, timeAt }
 }
-
 function fedRates(model: EnzymeModel, run: Run, start: ReactionStart): RateInto {
   const { volume: V0, substrate: m0, enzyme: E0, productPool } = start
   const { Km, Kic, Kiu, Ksi, Keq } = model.law(run.pH)
