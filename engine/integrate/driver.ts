@@ -4,7 +4,7 @@ import { firstStep } from './first-step.ts'
 import { locate } from './locate.ts'
 import type { Method } from './method.ts'
 import type { Arrival, Control, IntegrationFailure, Problem, RateInto } from './problem.ts'
-import { growth, LEAST_LOG_ERROR, shrinkage } from './step-size.ts'
+import { growth, rootOf, shrinkage } from './step-size.ts'
 import { createStiffnessWatch } from './stiffness.ts'
 
 /** A step that leaves the domain of the rate is cut to this part of itself… */
@@ -117,7 +117,7 @@ export const createDriver = (size: number): Drive => {
       spent.evaluations++
     }
 
-    let logBefore = 0
+    let rootBefore = 1
     let hBefore = 0
     let retreats = 0
     let retreatedFrom = 0
@@ -155,12 +155,12 @@ export const createDriver = (size: number): Drive => {
 
       accepted++
       const next = method.next
-      const logError = error > 1e-4 ? Math.log(error) : LEAST_LOG_ERROR
-      let proposal = h * growth(logError, logBefore, hBefore > 0 ? h / hBefore : 0, method.exponent)
+      const root = rootOf(error, method.exponent)
+      let proposal = h * growth(root, rootBefore, hBefore > 0 ? h / hBefore : 0)
       if (rejectedLast && proposal > h) proposal = h
       // A step cut short by the end says nothing against the one that was to be taken.
       step = final && proposal < step ? step : proposal
-      logBefore = logError
+      rootBefore = root
       hBefore = h
       rejectedLast = false
 

@@ -54,7 +54,7 @@ export function march(batch: Batch, mover: Mover, request: RunRequest): Outcome<
   let elapsedInLast = 0
   const finish = (reachedAt?: number): Outcome<BatchRun, RouteFailure> =>
     success({
-      ...(reachedAt !== undefined && { reachedAt }),
+      ...(reachedAt === undefined ? notReached : { reachedAt }),
       firstDoseAt,
       dosed,
       end: mover.state(time, last, elapsedInLast),
@@ -62,8 +62,10 @@ export function march(batch: Batch, mover: Mover, request: RunRequest): Outcome<
       marks,
       work: mover.work(),
     })
-  const steps = endless ? [...timeline.steps, timeline.after] : timeline.steps
-  for (const step of steps) {
+  const { steps } = timeline
+  const count = endless ? steps.length + 1 : steps.length
+  for (let i = 0; i < count; i++) {
+    const step = steps[i] ?? timeline.after
     if (step.kind === 'dose') {
       if (Number.isNaN(firstDoseAt)) firstDoseAt = time
       const mass = step.mass * request.doseScale
@@ -111,3 +113,4 @@ export function march(batch: Batch, mover: Mover, request: RunRequest): Outcome<
 }
 
 const none: readonly number[] = []
+const notReached = {}

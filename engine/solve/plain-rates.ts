@@ -28,15 +28,13 @@ export function plainRates(model: EnzymeModel, run: Run, start: ReactionStart, l
     : movingRates(model, run, start, length)
 }
 
-/** Change of ln √k over a run below which plain time is as good a variable. */
-const leastChange = 0.01
-/** …and above which the cold end would have no digits left. */
-const greatestChange = 10
+/** Beyond this ratio of k at a run's ends the variable would leave the cold end no digits. */
+const greatestRatio = 1e9
 
 /**
- * A batch that warms up or cools down, over x = (e^(βt) − 1)/(e^(βL) − 1) with e^(βL) the root of k at the end over
- * k at the start: k·dt and kd·dt are then low powers of x, where over time both are steep exponentials. The root takes
- * a fifth fewer rates than k itself or plain time.
+ * A batch that warms up or cools down, over x in t = L·x·(1 + b)/(1 + b·x), which passes the warm part of the run
+ * slowly: with 1 + b the fourth root of k at the end over k at the start, k·dt and kd·dt are mild functions of x where
+ * over time both are steep exponentials. Other powers, or none, take up to a fifth more rates.
  */
 function movingRates(model: EnzymeModel, run: Run, start: ReactionStart, length: number): PlainRates {
   const { volume, substrate: m0, enzyme: E0, productPool } = start
@@ -55,19 +53,19 @@ function movingRates(model: EnzymeModel, run: Run, start: ReactionStart, length:
   const linear = course.kind === 'linear'
   const from = course.from
   const slope = linear ? course.slope : 0
-  const change = 0.5 * Math.log(k(temperatureAt(course, length)) / k(from))
-  const size = Math.abs(change)
-  const curved = size > leastChange && size < greatestChange
-  const growth = Math.expm1(change)
-  const perChange = length / change
-  const timeAt = (x: number): number => (curved ? perChange * Math.log1p(growth * x) : length * x)
+  const ratio = k(temperatureAt(course, length)) / k(from)
+  const bend = ratio > 1 / greatestRatio && ratio < greatestRatio ? Math.sqrt(Math.sqrt(ratio)) - 1 : 0
+  const reach = length * (1 + bend)
+  const timeAt = (x: number): number => (reach * x) / (1 + bend * x)
   // Stages of a step come in twos and threes at the same place; the exponentials are kept for them.
-  const kept = Float64Array.of(Number.NaN, 0, 0)
+  const kept = new Float64Array(3)
+  kept[0] = Number.NaN
   const rate: RateInto = (out, state, x) => {
     if (x !== kept[0]) {
-      const t = timeAt(x)
+      const perBend = 1 / (1 + bend * x)
+      const t = reach * x * perBend
       const T = linear ? from + slope * t : temperatureAt(course, t)
-      const dt = curved ? (perChange * growth) / (1 + growth * x) : length
+      const dt = reach * perBend * perBend
       kept[0] = x
       kept[1] = k(T) * dt
       if (kd) kept[2] = kd(T) * dt

@@ -59,15 +59,9 @@ export function reactionRates(model: EnzymeModel, run: Run, start: ReactionStart
   if (steady && simple) {
     const perTime = 1 / (kSteady * E0 * timeScale)
     const perLoss = kdSteady / (kSteady * E0)
-    // Stages of a step come in twos and threes at the same u; what hangs on u alone is kept for them.
-    const kept = Float64Array.of(Number.NaN, 0)
     const rate: RateInto = (out, state, u) => {
-      if (u !== kept[0]) {
-        const m = m0 * Math.exp(-u)
-        kept[0] = u
-        kept[1] = a + m * (b + c * m)
-      }
-      const D = kept[1] as number
+      const m = m0 * Math.exp(-u)
+      const D = a + m * (b + c * m)
       out[0] = (perTime * D) / (state[1] as number)
       out[1] = -perLoss * D
     }
