@@ -1,5 +1,5 @@
 import type { PkPair } from '../scenario.ts'
-import { ionisation } from './ph-full.ts'
+import { ionisationRatio } from './ionisation-ratio.ts'
 
 /**
  * Factor on kd when acid and alkali speed up inactivation, relative to the pH where kd was measured.
@@ -8,4 +8,4 @@ import { ionisation } from './ph-full.ts'
  *          h(pH)/h(at), h = 1 + 10^(pKa1−pH) + 10^(pH−pKa2).
  */
 export const phInactivationFactor = (effect: PkPair & { readonly at: number }, pH: number): number =>
-  ionisation(effect, pH) / ionisation(effect, effect.at)
+  ionisationRatio(effect, pH, effect.at)

@@ -1,9 +1,12 @@
 /** The enzyme of a scenario as functions of temperature and pH: what the forms in the file come to. */
 import { activityPerMass, specificRateFromActivity } from '../kinetics/activity.ts'
+import { rateConstant } from '../kinetics/arrhenius.ts'
 import { gasConstant } from '../kinetics/gas-constant.ts'
 import { EaFromZ, kdFromD, kdFromHalfLife } from '../kinetics/heat-resistance.ts'
 import { massYieldOf } from '../kinetics/hydrolysis-gain.ts'
+import { ionisationRatio } from '../kinetics/ionisation-ratio.ts'
 import { bellOptimum } from '../kinetics/ph-bell.ts'
+import { phInactivationFactor } from '../kinetics/ph-inactivation.ts'
 import { EaFromQ10 } from '../kinetics/q10.ts'
 import type { RateConstants } from '../kinetics/rate-law.ts'
 import { activeShare } from '../kinetics/reversible-loss.ts'
@@ -15,10 +18,6 @@ import {
   type SpecificRate,
   type Temperature,
 } from '../units/quantity.ts'
-import { ionisationRatio } from './ionisation-ratio.ts'
-
-/** No constant is let above this, 1/s: products with amounts and times stay within the range of doubles. */
-const greatest = 1e200
 
 export interface EnzymeModel {
   /** At one pH, k of temperature: kg of substrate per kg of preparation and s. */
@@ -136,18 +135,6 @@ function latest(make: (pH: number | undefined) => OfTemperature): (pH: number | 
   }
 }
 
-/** The rate constant as a function of temperature: Arrhenius' law, kept within the range of doubles. */
-function rateConstant(k: number, energyOverR: number, at: number): (T: number) => number {
-  if (!(k > 0)) return () => 0
-  if (energyOverR === 0) return () => Math.min(k, greatest)
-  return (T) => {
-    const value = k * Math.exp((energyOverR * (T - at)) / (T * at))
-    if (value <= greatest) return value
-    const exponent = Math.log(k) + (energyOverR * ((T - at) / T)) / at
-    return exponent < Math.log(greatest) ? Math.exp(exponent) : greatest
-  }
-}
-
 function massYieldOfFeed({ substrate, product }: Feed): number {
   if (product.massYield !== undefined) return product.massYield
   const { stoichiometry } = product
@@ -164,7 +151,7 @@ function inactivationModel(stated: NonNullable<Enzyme['inactivation']>): {
   const effect = stated.pH
   const withPh = ({ kd, ed, at }: { kd: number; ed: number; at: number }) =>
     latest((pH) =>
-      rateConstant(effect && pH !== undefined ? kd * ionisationRatio(effect, pH, effect.at) : kd, ed, at),
+      rateConstant(effect && pH !== undefined ? kd * phInactivationFactor(effect, pH) : kd, ed, at),
     )
   const one = stepConstants(first)
   const two = second && stepConstants(second)

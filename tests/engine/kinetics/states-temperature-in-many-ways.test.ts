@@ -1,6 +1,7 @@
 import { afterAll, describe, expect, test } from 'vitest'
 import { activityPerMass, specificRateFromActivity } from '../../../engine/kinetics/activity.ts'
 import { arrheniusFactor } from '../../../engine/kinetics/arrhenius.ts'
+import { gasConstant } from '../../../engine/kinetics/gas-constant.ts'
 import {
   DAt,
   DFromKd,
@@ -48,7 +49,10 @@ const given: Readonly<
   Ea_to_Q10: ({ Ea, T }) => ({ Q10: Q10FromEa(kilojoules(Ea), celsius(T)) }),
   two_rates: ({ k1, T1, k2, T2 }) => {
     const Ea = EaFromRates(k1, celsius(T1), k2, celsius(T2))
-    return { Ea: Ea / 1000, Q10_between: arrheniusFactor(Ea, celsius(T1), celsius(T2)) ** (10 / (T2 - T1)) }
+    return {
+      Ea: Ea / 1000,
+      Q10_between: arrheniusFactor(Ea / gasConstant, celsius(T1), celsius(T2)) ** (10 / (T2 - T1)),
+    }
   },
   kd_halflife_D: ({ kd }) => {
     const halfLife = halfLifeFromKd(perMinute(kd))
@@ -78,7 +82,9 @@ const given: Readonly<
     z_local: zFromEa(kilojoules(Ed), celsius(T)),
     z_exact_tenfold_above_T:
       z_exact_tenfold_above_T *
-      Math.log10(arrheniusFactor(kilojoules(Ed), celsius(T), celsius(T + z_exact_tenfold_above_T))),
+      Math.log10(
+        arrheniusFactor(kilojoules(Ed) / gasConstant, celsius(T), celsius(T + z_exact_tenfold_above_T)),
+      ),
   }),
   unit_to_katal: ({ U }) => {
     const rate = quantity<never>(read(`${U} U`, 'amount rate'))
@@ -99,7 +105,7 @@ const given: Readonly<
     }
   },
   assay_to_process: ({ activity_U_per_g, T_assay, T_process, Ea }) => {
-    const factor = arrheniusFactor(kilojoules(Ea), celsius(T_assay), celsius(T_process))
+    const factor = arrheniusFactor(kilojoules(Ea) / gasConstant, celsius(T_assay), celsius(T_process))
     return { factor, activity_at_process_U_per_g: activity_U_per_g * factor }
   },
 }

@@ -1,9 +1,12 @@
-import { ionisation } from '../kinetics/ph-full.ts'
 import type { PkPair } from '../scenario.ts'
+import { ionisation } from './ph-full.ts'
 
 /**
- * Total over active form at one pH, over the same at another; in logarithms where the pKs lie so far off that each
- * alone leaves the range of doubles.
+ * Total over active form at one pH, over the same at another: by how much an effect of ionisation differs from
+ * where it was measured.
+ *
+ * Source   Michaelis pH functions (Segel 1975); in logarithms where the pKs lie so far off that each alone leaves
+ *          the range of doubles.
  */
 export function ionisationRatio(pKs: PkPair, pH: number, other: number): number {
   const ratio = ionisation(pKs, pH) / ionisation(pKs, other)
