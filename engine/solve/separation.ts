@@ -106,11 +106,16 @@ class SeparationMover implements Mover {
   }
 
   state(time: number, run: Run, elapsed: number): BatchState {
+    return this.stateAt(this.position(), this.forms, run, elapsed, time)
+  }
+
+  /** The coordinate that the enzyme-time supplied so far has come to. */
+  private position(): number {
     if (this.uAt !== this.supplied) {
       this.u = coordinateAfter(this.path, this.supplied, this.u)
       this.uAt = this.supplied
     }
-    return this.stateAt(this.u, this.forms, run, elapsed, time)
+    return this.u
   }
 
   work(): typeof noWork {
@@ -193,7 +198,7 @@ class SeparationMover implements Mover {
 
   /** A run without enzyme: nothing happens in it but time. */
   private standStill(run: Run, length: number, outputs: readonly number[]): Outcome<Advance, RouteFailure> {
-    const states = outputs.map((τ) => this.stateAt(this.u, this.forms, run, τ, τ))
+    const states = outputs.map((τ) => this.stateAt(this.position(), this.forms, run, τ, τ))
     return success({ elapsed: length, stopped: false, outputs: states })
   }
 

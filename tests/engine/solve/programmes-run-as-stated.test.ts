@@ -245,3 +245,18 @@ test('costs are enzyme and vessel time with turnaround', () => {
   )
   expect(cost?.value).toBeCloseTo(30 * 3 + 85 * ((time as number) / 3600 + 1.5), 9)
 })
+
+test('after a kill step the conversion stays where it was (first-order loss to nothing)', () => {
+  const phases: Phase[] = [
+    dose(3),
+    { phase: 'heat', to: celsius(40) },
+    hold(3),
+    { phase: 'inactivate', to: celsius(90), ramp: quantity(1 / 60), hold: minutes(10) },
+    { phase: 'cool', to: celsius(8), ramp: quantity(1 / 60) },
+  ]
+  const { conversion, product } = trace(phases, [3 * 3600, 4 * 3600, 5 * 3600, 9 * 3600])
+  expect(conversion[1]).toBeGreaterThan(conversion[0] as number)
+  expect(conversion[2]).toBe(conversion[1])
+  expect(conversion[3]).toBe(conversion[1])
+  expect(product[3]).toBeCloseTo(0.5263 * 45 * (conversion[1] as number), 9)
+})
