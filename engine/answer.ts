@@ -115,6 +115,8 @@ export type Warning =
   /** The checking route gave up. */
   | { readonly code: 'check-failed'; readonly failure: PlanFailure['kind'] }
   | { readonly code: 'beyond-equilibrium'; readonly equilibriumConversion: number }
+  /** The target is met before all of the feed is in; feeding goes on so long after it. */
+  | { readonly code: 'fed-after-target'; readonly until: Time }
   /** Longer than anybody waits: over a year. */
   | { readonly code: 'very-long'; readonly time: Time }
 

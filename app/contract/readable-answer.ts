@@ -107,7 +107,8 @@ const killSentences = (answer: Answer): readonly string[] => {
   if (answer.killStep === undefined) return []
   const { residualActivity, logReduction } = answer.killStep
   const left = residualActivity < 1e-9 ? 'less than a billionth' : percent(residualActivity, 2)
-  const down = logReduction > 12 ? 'more than 12' : formatNumber(logReduction, 2)
+  // A lethality is never rounded up.
+  const down = logReduction > 12 ? 'more than 12' : formatNumber(Math.floor(10 * logReduction) / 10, 3)
   return [
     `After the kill step ${left} of the enzyme charged is active; the step takes it down by ${down} powers of ten.`,
   ]

@@ -47,6 +47,8 @@ export const warningSentence = (warning: Warning): string => {
       return `The independent check gave up: ${gaveUp(warning.failure)}. The answer stands on one route alone.`
     case 'beyond-equilibrium':
       return `The target lies beyond the equilibrium, which is at ${percent(warning.equilibriumConversion)} conversion.`
+    case 'fed-after-target':
+      return `The target is met before all of the feed is in: feeding goes on for ${hours(warning.until)} and takes the conversion down again.`
     case 'very-long':
       return `The time, ${hours(warning.time)}, is longer than anybody waits; take it as "not in practice".`
     default:
@@ -71,9 +73,9 @@ export const remedySentence = (remedy: Remedy): string => {
     case 'better-pH':
       return `At pH ${formatNumber(remedy.pH)} ${takes}.`
     case 'longer-hold':
-      return `Held ${hours(remedy.extra)} longer the batch makes it: ${takes}.`
+      return `With ${hours(remedy.extra)} more of the last hold before cooling or killing ${takes}.`
     case 'sooner':
-      return `With all doses given at the start ${takes}.`
+      return `With all doses given at the programme's start, before anything else, ${takes}.`
     case 'staged':
       return `With ${remedy.doses} doses of ${kilograms(remedy.each)}, one every ${hours(remedy.every)}, ${takes}.`
     default:
@@ -103,7 +105,7 @@ export const hoursCauseSentence = (cause: HoursCause): string => {
     case 'heating':
       return 'heating up and cooling'
     case 'staging':
-      return 'waiting for later doses'
+      return 'later doses and feeding'
     default:
       return cause satisfies never
   }

@@ -1,9 +1,10 @@
 /** What every answer is built from: the check, the work, the balance, the warnings that any ask may raise. */
-import type { Answer, Check, KillStep, Warning, Work } from '../answer.ts'
+import type { Answer, Check, Warning, Work } from '../answer.ts'
 import type { Outcome } from '../outcome.ts'
 import type { Scenario } from '../scenario.ts'
-import { quantity, type Temperature } from '../units/quantity.ts'
+import { quantity, type Temperature, type Time } from '../units/quantity.ts'
 import { measuredAt } from './enzyme-model.ts'
+import { honestDigits } from './reach.ts'
 import type { BatchRun, BatchState, RouteFailure } from './route.ts'
 import type { Solver } from './solver.ts'
 import { holdTemperature } from './variants.ts'
@@ -46,6 +47,24 @@ export function checkWarnings(check: Check, factor = 1): Warning[] {
     : []
 }
 
+/** Magnification of errors above which an answer hangs on the edge of reachability. */
+const edge = 1e3
+
+/** The warning that few digits are left, if so. */
+export const edgeWarnings = (amplification: number | undefined): Warning[] =>
+  amplification !== undefined && amplification > edge
+    ? [{ code: 'near-the-edge', amplification, digits: honestDigits(amplification) }]
+    : []
+
+/** Warns where the target is met before all of the feed is in, and feeding takes the conversion down again. */
+export function feedWarnings({ batch }: Solver, reachedAt: number, whole: BatchRun | undefined): Warning[] {
+  const { steps } = batch.timeline
+  const fed = new Set(steps.flatMap((step) => (step.kind === 'run' && step.feed ? [step.phase] : [])))
+  const end =
+    whole?.marks.reduce((last, mark) => (fed.has(mark.phase) ? Math.max(last, mark.to) : last), 0) ?? 0
+  return end > reachedAt ? [{ code: 'fed-after-target', until: quantity<Time>(end - reachedAt) }] : []
+}
+
 /** The warning that the checking route gave up, if it did. */
 export const gaveUp = (route: Outcome<unknown, RouteFailure>): Warning[] =>
   route.ok ? [] : [{ code: 'check-failed', failure: route.failure.kind }]
@@ -62,20 +81,6 @@ export function conditionWarnings(scenario: Scenario): Warning[] {
 /** Largest relative drift of substrate + product/yield over the states of a batch. */
 export const massBalanceOf = (states: readonly BatchState[]): number =>
   states.reduce((worst, { imbalance }) => Math.max(worst, Math.abs(imbalance)), 0)
-
-/** What a kill step leaves, from a run through the whole programme. */
-export function killStepOf(scenario: Scenario, run: BatchRun): KillStep | undefined {
-  if (scenario.programme.kind !== 'phases') return undefined
-  const { phases } = scenario.programme
-  const kills = run.marks.filter(({ phase }) => phases[phase]?.phase === 'inactivate')
-  const first = kills[0]
-  const last = kills[kills.length - 1]
-  if (!first || !last || !(first.enzymeFrom > 0)) return undefined
-  const residualActivity = last.enzymeTo / run.dosed
-  // A share below 1e-300 is nothing to a double.
-  const logReduction = -Math.log10(Math.max(last.enzymeTo / first.enzymeFrom, 1e-300))
-  return Number.isFinite(residualActivity + logReduction) ? { residualActivity, logReduction } : undefined
-}
 
 /** Work of several runs together. */
 export const workOf = (...runs: readonly { readonly work: Work }[]): Work =>

@@ -61,8 +61,13 @@ export function goodTemperature(
   return found ? found.at : null
 }
 
-/** How the checking route sees the optimum: sought in a narrow window around the answer, K. */
-export function checkedTemperature(
+/**
+ * How far the checking route's optimum, sought in a narrow window, lies from the answer: relative in K, or, where the
+ * optimum is so flat that every temperature of the window does as well, in what is reached.
+ *
+ * Shapes   null where the checking route finds none.
+ */
+export function temperatureDifference(
   scenario: Scenario,
   aim: Aim,
   near: number,
@@ -83,7 +88,12 @@ export function checkedTemperature(
     8,
     1e-6,
   )
-  return found && (!found.atBound || found.at === low || found.at === high) ? found.at : null
+  if (!found) return null
+  const answered = solverOf(atHoldTemperature(scenario, near))
+  const there = byRoute(answered.checks, answered, aim, spend)
+  const apart = Math.abs(found.at - near) / near
+  const flat = Math.abs(there - found.value)
+  return Math.min(apart, Number.isFinite(flat) ? flat : apart)
 }
 
 function badness(solver: Solver, aim: Aim, spend: Budget): number {

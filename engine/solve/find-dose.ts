@@ -1,21 +1,24 @@
 /** The dose with which a batch reaches its conversion within a time, all doses scaled by one factor. */
-import type { Warning } from '../answer.ts'
 import { failed, type Outcome, success } from '../outcome.ts'
 import type { Scenario } from '../scenario.ts'
 import { type Mass, quantity, type Time } from '../units/quantity.ts'
 import {
   type AnswerBody,
   checkOf,
+  checkOfConversion,
   checkWarnings,
   conditionWarnings,
-  killStepOf,
+  edgeWarnings,
+  feedWarnings,
+  gaveUp,
   massBalanceOf,
   workOf,
 } from './answers.ts'
 import { checkedScale, doseScaleFor, leastDoseScale } from './dose.ts'
 import { equilibriumBefore } from './equilibrium.ts'
 import { hoursLedger } from './hours.ts'
-import { amplification, honestDigits, reach } from './reach.ts'
+import { killStepOf } from './kill-step.ts'
+import { amplification, honestDigits, reach, restingConversion } from './reach.ts'
 import { reachabilityRemedies, shorteningRemedies } from './remedies.ts'
 import type { RouteFailure } from './route.ts'
 import { type Solver, solverOf } from './solver.ts'
@@ -34,42 +37,16 @@ export function findDose(
   const least = solver.batch.timeline.endless ? leastDoseScale(solver, conversion) : success(null)
   if (!least.ok) return failed(least.failure)
   const leastDose = least.value === null ? {} : { leastDose: quantity<Mass>(least.value * solver.fullDose) }
-  const warnings: Warning[] = [...conditionWarnings(scenario)]
-  if (found.value.kind === 'none') {
-    const { limit } = found.value
-    const equilibriumConversion = equilibriumBefore(solver.batch, conversion)
-    if (equilibriumConversion !== undefined)
-      warnings.push({ code: 'beyond-equilibrium', equilibriumConversion })
-    // A stable enzyme comes to the same equilibrium, by steps as by the closed form.
-    const ended = solverOf(withoutInactivation(scenario)).checks({ doseScale: 1, endless: true })
-    return success({
-      reachable: false,
-      limitingConversion: limit,
-      ...leastDose,
-      check: checkOf(solver, limit, ended.ok ? ended.value.end.conversion : null),
-      remedies: reachabilityRemedies(scenario, solver, conversion),
-      work: ended.ok
-        ? ended.value.work
-        : { stepsAccepted: 0, stepsRejected: 0, rateEvaluations: 0, jacobians: 0 },
-      massBalance: ended.ok ? massBalanceOf([ended.value.end]) : 0,
-      warnings,
-    })
-  }
-  const { scale } = found.value
-  const check = checkOf(solver, scale, checkedScale(solver, conversion, until, scale))
-  warnings.push(...checkWarnings(check))
-  const dosed = solverOf(withDoses(scenario, scale))
-  const reached = reach(dosed, conversion)
+  if (found.value.kind === 'none')
+    return none(scenario, solver, conversion, until, found.value.limit, leastDose)
+  const { scale, solver: dosed, reached } = justEnough(scenario, conversion, found.value.scale)
   if (!reached.ok) return failed(reached.failure)
-  // Round-off may leave the target a hair beyond the moment it was sized for.
-  const ended = dosed.answers({ doseScale: 1, until, endless: false })
-  if (!ended.ok) return failed(ended.failure)
-  const soon = reached.value.time !== undefined && reached.value.time < within
-  const run = soon ? reached.value.run : ended.value
-  const time = soon ? (reached.value.time ?? within) : ended.value.end.time - ended.value.firstDoseAt
+  const { run } = reached.value
+  const time = Math.min(within, reached.value.time ?? within)
+  const check = checkOf(solver, scale, checkedScale(solver, conversion, until, scale))
   const factor = amplification(dosed, { run, time }, conversion)
-  const whole = dosed.answers({ doseScale: 1, endless: false })
-  const killStep = !solver.batch.timeline.endless && whole.ok ? killStepOf(scenario, whole.value) : undefined
+  const whole = dosed.batch.timeline.endless ? undefined : dosed.answers({ doseScale: 1, endless: false })
+  const killStep = whole?.ok ? killStepOf(scenario, dosed, whole.value) : undefined
   const hours = hoursLedger(withDoses(scenario, scale), dosed, conversion, run, time)
   return success({
     reachable: true,
@@ -84,7 +61,61 @@ export function findDose(
     remedies: shorteningRemedies(withDoses(scenario, scale), dosed, conversion, time),
     work: workOf(run),
     massBalance: massBalanceOf([run.end]),
-    warnings,
+    warnings: [
+      ...conditionWarnings(scenario),
+      ...checkWarnings(check),
+      ...edgeWarnings(factor),
+      ...feedWarnings(dosed, run.end.time, whole?.ok ? whole.value : undefined),
+    ],
+  })
+}
+
+/** Round-off may leave the target a hair beyond the dose sized for it: the dose is then raised by as little. */
+function justEnough(scenario: Scenario, conversion: number, exact: number) {
+  for (let excess = 0; ; excess = excess === 0 ? 1e-15 : 10 * excess) {
+    const scale = exact * (1 + excess)
+    const solver = solverOf(withDoses(scenario, scale))
+    const reached = reach(solver, conversion)
+    if (excess > 1e-8 || !reached.ok || reached.value.time !== undefined) return { scale, solver, reached }
+  }
+}
+
+/** No dose does it: the equilibrium stands before the target, or the programme ends too soon for any dose. */
+function none(
+  scenario: Scenario,
+  solver: Solver,
+  conversion: number,
+  until: number,
+  limit: number,
+  leastDose: Partial<AnswerBody>,
+): Outcome<AnswerBody, RouteFailure> {
+  const equilibriumConversion = equilibriumBefore(solver.batch, conversion)
+  const beyond = equilibriumConversion !== undefined
+  // A stable enzyme comes to the same equilibrium by steps; where the programme ends, both routes are asked.
+  const stated = beyond ? solverOf(withoutInactivation(scenario)) : solver
+  const request = beyond ? { doseScale: 1, endless: true } : { doseScale: 1, endless: false, until }
+  const ended = stated.answers(request)
+  if (!ended.ok) return failed(ended.failure)
+  const other = stated.checks(request)
+  const resting = beyond ? success(limit) : restingConversion(solver)
+  if (!resting.ok) return failed(resting.failure)
+  const answer = beyond ? limit : ended.value.end.conversion
+  const check = checkOfConversion(solver, answer, other.ok ? other.value.end.conversion : null)
+  return success({
+    reachable: false,
+    conversion: limit,
+    limitingConversion: resting.value,
+    ...leastDose,
+    check,
+    remedies: reachabilityRemedies(scenario, solver, conversion),
+    work: other.ok ? workOf(ended.value, other.value) : ended.value.work,
+    massBalance: massBalanceOf([ended.value.end]),
+    warnings: [
+      ...conditionWarnings(scenario),
+      ...gaveUp(other),
+      ...checkWarnings(check),
+      ...(beyond ? [{ code: 'beyond-equilibrium', equilibriumConversion } as const] : []),
+    ],
   })
 }
 

@@ -3,15 +3,8 @@ import type { Warning } from '../answer.ts'
 import { failed, type Outcome, success } from '../outcome.ts'
 import type { Ask, Scenario } from '../scenario.ts'
 import { type Mass, quantity, type Temperature, type Time } from '../units/quantity.ts'
-import {
-  type AnswerBody,
-  checkOf,
-  checkOfConversion,
-  conditionWarnings,
-  massBalanceOf,
-  workOf,
-} from './answers.ts'
-import { bestTemperature, checkedTemperature } from './best-temperature.ts'
+import { type AnswerBody, checkOfConversion, conditionWarnings, massBalanceOf, workOf } from './answers.ts'
+import { bestTemperature, temperatureDifference } from './best-temperature.ts'
 import { restingConversion } from './reach.ts'
 import { reachabilityRemedies } from './remedies.ts'
 import type { RouteFailure } from './route.ts'
@@ -40,7 +33,10 @@ export function findTemperature(scenario: Scenario, ask: TemperatureAsk): Outcom
       : { doseScale: 1, until: solver.firstDoseAt + ask.within, endless: false },
   )
   if (!run.ok) return failed(run.failure)
-  const check = checkOf(solver, best.at, checkedTemperature(scenario, aim, best.at, low, high))
+  const check = {
+    method: solver.checkMethod,
+    relativeDifference: temperatureDifference(scenario, aim, best.at, low, high),
+  }
   const warnings: Warning[] = [...conditionWarnings(chosen)]
   if (best.atBound) warnings.push({ code: 'optimum-at-bound', temperature })
   if (check.relativeDifference !== null && check.relativeDifference > agreement)

@@ -10,14 +10,16 @@ import {
   checkOfConversion,
   checkWarnings,
   conditionWarnings,
+  edgeWarnings,
+  feedWarnings,
   gaveUp,
-  killStepOf,
   massBalanceOf,
   workOf,
 } from './answers.ts'
 import { leastDoseScale } from './dose.ts'
 import { equilibriumBefore } from './equilibrium.ts'
 import { hoursLedger } from './hours.ts'
+import { killStepOf } from './kill-step.ts'
 import { timeByQuadrature } from './protected-batch.ts'
 import { amplification, honestDigits, reach, restingConversion } from './reach.ts'
 import { reachabilityRemedies, shorteningRemedies } from './remedies.ts'
@@ -42,7 +44,7 @@ export function findTime(
   if (!least.ok) return failed(least.failure)
   const leastDose = least.value === null ? {} : { leastDose: quantity<Mass>(least.value * solver.fullDose) }
   const whole = solver.batch.timeline.endless ? undefined : solver.answers({ doseScale: 1, endless: false })
-  const killStep = whole?.ok ? killStepOf(scenario, whole.value) : undefined
+  const killStep = whole?.ok ? killStepOf(scenario, solver, whole.value) : undefined
   const warnings: Warning[] = [...conditionWarnings(scenario)]
   if (killStep && killStep.residualActivity > killed)
     warnings.push({ code: 'kill-step-incomplete', residualActivity: killStep.residualActivity })
@@ -58,8 +60,10 @@ export function findTime(
   const factor = amplification(solver, reached.value, conversion)
   warnings.push(...(integrated === undefined ? gaveUp(checked) : []), ...checkWarnings(check, factor))
   const digits = factor === undefined ? undefined : honestDigits(factor)
-  if (factor !== undefined && digits !== undefined && factor > 1e3)
-    warnings.push({ code: 'near-the-edge', amplification: factor, digits })
+  warnings.push(
+    ...edgeWarnings(factor),
+    ...feedWarnings(solver, run.end.time, whole?.ok ? whole.value : undefined),
+  )
   const { programme } = scenario
   if (programme.kind === 'constant' && programme.hold !== undefined && programme.hold < time)
     warnings.push({ code: 'hold-shorter-than-time', hold: programme.hold, time: quantity<Time>(time) })

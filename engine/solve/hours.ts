@@ -65,7 +65,7 @@ export function hoursLedger(
   const steady =
     scenario.programme.kind === 'constant'
       ? time
-      : timeTo(solverOf(steadyAt(scenario, T, phaseDurations(run))), conversion)
+      : endlessTimeTo(solverOf(steadyAt(scenario, T, phaseDurations(run))), conversion)
   if (!Number.isFinite(atOnce) || !Number.isFinite(steady)) return undefined
   const { rate } = scenario.enzyme
   const lines: { cause: HoursCause; time: Time }[] = []
@@ -118,6 +118,13 @@ function atOnceScenario(
     },
     { temperature: T, pH, dose: run.dosed },
   )
+}
+
+/** Time to a conversion when the last conditions go on: a comparison batch is not cut short by its programme. */
+function endlessTimeTo(solver: Solver, conversion: number): number {
+  const run = solver.answers({ doseScale: 1, target: conversion, endless: true })
+  if (!run.ok || run.value.reachedAt === undefined) return Number.POSITIVE_INFINITY
+  return run.value.reachedAt - run.value.firstDoseAt
 }
 
 /** How long each phase took in a run, s, the passed pieces of one phase together. */

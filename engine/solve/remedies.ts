@@ -13,6 +13,10 @@ import { atHoldTemperature, atPh, dosedAtOnce, holdTemperature, withHalfTheInhib
 const doseStep = 1.2
 const temperatureStep = 3
 const targetStep = 0.02
+/** A change that saves a smaller share of the hold is not worth a line. */
+const worthSaying = 0.005
+/** A remedy that takes longer than this is none, s: thirty days. */
+const longest = 30 * 86400
 
 /** Changes that shorten the hold of a reachable plan, the strongest first. */
 export function shorteningRemedies(
@@ -23,7 +27,7 @@ export function shorteningRemedies(
 ): Remedy[] {
   const found: Remedy[] = []
   const consider = (remedy: Remedy): void => {
-    if (remedy.time < time * (1 - 1e-6)) found.push(remedy)
+    if (remedy.time < time * (1 - worthSaying)) found.push(remedy)
   }
   const t = (changed: Solver, target = conversion, scale = 1): Time =>
     quantity<Time>(timeTo(changed, target, scale))
@@ -59,7 +63,7 @@ export function reachabilityRemedies(scenario: Scenario, solver: Solver, convers
   if (equilibriumBefore(solver.batch, conversion) !== undefined) return []
   const found: Remedy[] = []
   const consider = (remedy: Remedy): void => {
-    if (Number.isFinite(remedy.time) && remedy.time >= 0) found.push(remedy)
+    if (remedy.time >= 0 && remedy.time < longest) found.push(remedy)
   }
   const scale = sufficientScale(solver, conversion)
   if (scale !== undefined) {
@@ -81,16 +85,8 @@ export function reachabilityRemedies(scenario: Scenario, solver: Solver, convers
   if (scenario.programme.kind === 'phases') {
     const sooner = solverOf(dosedAtOnce(dosedFirst(scenario)))
     consider({ kind: 'sooner', time: quantity<Time>(timeTo(sooner, conversion)) })
-    const endless = solver.answers({ doseScale: 1, target: conversion, endless: true })
-    const whole = solver.answers({ doseScale: 1, endless: false })
-    if (endless.ok && whole.ok && endless.value.reachedAt !== undefined) {
-      const extra = quantity<Time>(endless.value.reachedAt - whole.value.end.time)
-      consider({
-        kind: 'longer-hold',
-        extra,
-        time: quantity<Time>(endless.value.reachedAt - endless.value.firstDoseAt),
-      })
-    }
+    const held = longerHold(scenario, solver, conversion)
+    if (held) consider(held)
   }
   return found.sort((a, b) => a.time - b.time)
 }
@@ -135,6 +131,36 @@ function stagedDoses(
     },
   })
   return { kind: 'staged', doses, each, every, time: quantity<Time>(timeTo(staged, conversion)) }
+}
+
+/** The last hold before cooling or killing held until the target is there. */
+function longerHold(scenario: Scenario, solver: Solver, conversion: number): Remedy | undefined {
+  const { programme } = scenario
+  if (programme.kind === 'constant') return undefined
+  const { phases } = programme
+  const dosed = phases.findIndex((phase) => phase.phase === 'dose')
+  const killed = phases.findIndex((phase) => phase.phase === 'inactivate')
+  const last = phases.findLastIndex(
+    (phase, i) => phase.phase === 'hold' && i > dosed && (killed < 0 || i < killed),
+  )
+  const whole = solver.answers({ doseScale: 1, endless: false })
+  if (last < 0 || !whole.ok) return undefined
+  const until: Phase = { phase: 'hold', until: { conversion }, atMost: quantity<Time>(longest) }
+  const held = solverOf({
+    ...scenario,
+    programme: { ...programme, phases: phases.map((phase, i) => (i === last ? until : phase)) },
+  }).answers({ doseScale: 1, target: conversion, endless: false })
+  if (!held.ok || held.value.reachedAt === undefined) return undefined
+  const inHold = held.value.marks.find((mark) => mark.phase === last)
+  const before = whole.value.marks.find((mark) => mark.phase === last)
+  if (!inHold || !before) return undefined
+  const extra = inHold.to - inHold.from - (before.to - before.from)
+  if (!(extra > 0)) return undefined
+  return {
+    kind: 'longer-hold',
+    extra: quantity<Time>(extra),
+    time: quantity<Time>(held.value.reachedAt - held.value.firstDoseAt),
+  }
 }
 
 /** With the first dose before everything else. */

@@ -28,6 +28,10 @@ test.each<[Warning, string]>([
     'The best temperature lies at a bound of the range asked, 60 °C; beyond it may be better still.',
   ],
   [
+    { code: 'fed-after-target', until: hours(2) },
+    'The target is met before all of the feed is in: feeding goes on for 2 h and takes the conversion down again.',
+  ],
+  [
     { code: 'hold-shorter-than-time', hold: hours(5), time },
     'The programme holds for 5 h, but the target takes 6.5 h.',
   ],
@@ -65,9 +69,12 @@ test.each<[Remedy, string]>([
   [{ kind: 'better-pH', pH: 6.65, time }, 'At pH 6.65 the target takes 6.5 h.'],
   [
     { kind: 'longer-hold', extra: hours(1.5), time },
-    'Held 1.5 h longer the batch makes it: the target takes 6.5 h.',
+    'With 1.5 h more of the last hold before cooling or killing the target takes 6.5 h.',
   ],
-  [{ kind: 'sooner', time }, 'With all doses given at the start the target takes 6.5 h.'],
+  [
+    { kind: 'sooner', time },
+    "With all doses given at the programme's start, before anything else, the target takes 6.5 h.",
+  ],
   [{ kind: 'more-dose', dose: quantity<Mass>(4.2), time }, 'With a dose of 4.2 kg the target takes 6.5 h.'],
 ])('remedy %j', (remedy, sentence) => {
   expect(remedySentence(remedy)).toBe(sentence)
