@@ -19,7 +19,7 @@ export interface Solver {
 }
 
 /** A step may add this relative error where integration answers: two digits below what is promised. */
-const answering = { tolerance: 1e-10, method: 'automatic', maxSteps: 60_000 } as const
+const answering = { tolerance: 1e-11, method: 'automatic', maxSteps: 60_000 } as const
 /** Where it checks. */
 const checking = { tolerance: 1e-9, method: 'automatic', maxSteps: 60_000 } as const
 const checkingImplicitly = { tolerance: 1e-8, method: 'implicit', maxSteps: 60_000 } as const
