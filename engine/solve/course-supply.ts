@@ -21,8 +21,12 @@ const { nodes } = gauss16
 
 /** Change of ln k or ln kd within a cell whose 16 nodes keep the running integral at 1e-11 of itself. */
 const cellSpan = 6
+/** The same where hardly any enzyme is lost, so that an error of 3e-11 of the loss does not count. */
+const calmSpan = 9
+/** Loss over the course, in e-folds, below which that is so. */
+const calmLoss = 0.1
 /** Enzyme lost within a cell, in e-folds, that keeps it there. */
-const cellLoss = 2
+const cellLoss = 1.3
 /** Past this many e-folds what is still supplied is below the last digit of what was. */
 const spent = 45
 
@@ -58,6 +62,8 @@ export class CourseSupply {
   private readonly course: TemperatureCourse
   private readonly length: number
   private readonly cells: number
+  /** Too little is lost for a cell to be cut. */
+  private readonly calm: boolean
   private readonly temperatureStep: number
   /** The present cell: its number, ends, and what had been supplied and lost before it. */
   private cell = -1
@@ -87,7 +93,12 @@ export class CourseSupply {
     const to = temperatureAt(course, length)
     const steepest = Math.max(steepness.rate, steepness.inactivation)
     const span = (steepest * Math.abs(to - from)) / (from * to)
-    this.cells = Math.min(mostCells, Math.max(1, Math.ceil(span / cellSpan)))
+    const { k1 } = constants
+    // A constant that grows e-fold `span` times along a ramp has nearly all its integral in the last of these e-folds.
+    const most = k1 ? Math.max(k1(from), k1(to)) * length : 0
+    this.calm = most < Math.min(cellLoss, calmLoss * Math.max(1, span))
+    const widest = this.calm ? calmSpan : cellSpan
+    this.cells = Math.min(mostCells, Math.max(1, Math.ceil(span / widest)))
     this.temperatureStep = (to - from) / this.cells
     this.next()
   }
@@ -188,7 +199,7 @@ export class CourseSupply {
   /** How far a piece of a cell may go so that the enzyme does not die within it. */
   private pieceEnd(from: number, end: number): number {
     const { k1 } = this.constants
-    if (!k1 || this.lostBefore > spent) return end
+    if (!k1 || this.calm || this.lostBefore > spent) return end
     const before = k1(temperatureAt(this.course, from))
     let to = end
     for (;;) {

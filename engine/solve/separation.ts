@@ -39,10 +39,13 @@ export function pathOf({ feed, model, timeline }: Batch): ReactionPath {
   return reactionPath(model.law(timeline.after.pH), charge, feed.substrate.slow)
 }
 
-/** The route of a batch that separates. */
-export function separationRoute(batch: Batch): Route {
+/**
+ * The route of a batch that separates.
+ *
+ * Shapes   a workspace may be handed in and is then shared with other routes, one run at a time.
+ */
+export function separationRoute(batch: Batch, room: CourseWorkspace = courseWorkspace()): Route {
   const path = pathOf(batch)
-  const room = courseWorkspace()
   return (request) => march(batch, new SeparationMover(batch, path, room), request)
 }
 
@@ -161,7 +164,7 @@ class SeparationMover implements Mover {
       supplied: steadySupply(constants, forms, τ),
       forms: steadyForms(constants, forms, τ),
     }))
-    this.settle(stopped ? target : null, due, steadySupply(constants, forms, elapsed))
+    this.settle(stopped ? target : null, due, stopped ? due : steadySupply(constants, forms, elapsed))
     this.forms = steadyForms(constants, forms, elapsed)
     return success({ elapsed, stopped, outputs: states })
   }

@@ -1,6 +1,7 @@
 /** What needs no stepping: closed forms, programmes by separation, laws that are integrated by quadrature. */
 import { type Charge, enzymeTime } from '../../engine/kinetics/integrated-rate-law.ts'
 import { decayingTime, timeAtConstantConditions } from '../../engine/solve/constant-conditions.ts'
+import { courseWorkspace } from '../../engine/solve/course-supply.ts'
 import { enzymeModel } from '../../engine/solve/enzyme-model.ts'
 import { odeRoute } from '../../engine/solve/ode-route.ts'
 import {
@@ -95,7 +96,8 @@ function closedForm(): void {
 }
 
 function programmes(label: string, cases: readonly Case[]): void {
-  const routes = cases.map(({ batch }) => separationRoute(batch))
+  const room = courseWorkspace()
+  const routes = cases.map(({ batch }) => separationRoute(batch, room))
   const out = new Float64Array(cases.length)
   const exact = Float64Array.from(cases, ({ batch }) => {
     const run = odeRoute(batch, { tolerance: 1e-13, method: 'explicit', maxSteps: 1e6 })({
