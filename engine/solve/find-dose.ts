@@ -42,7 +42,8 @@ export function findDose(
   const { scale, solver: dosed, reached } = justEnough(scenario, conversion, found.value.scale)
   if (!reached.ok) return failed(reached.failure)
   const { run } = reached.value
-  const time = Math.min(within, reached.value.time ?? within)
+  // Under constant conditions the dose was sized for just this time, however ill-conditioned the way back is.
+  const time = solver.batch.timeline.endless ? within : Math.min(within, reached.value.time ?? within)
   const check = checkOf(solver, scale, checkedScale(solver, conversion, until, scale))
   const factor = amplification(dosed, { run, time }, conversion)
   const whole = dosed.batch.timeline.endless ? undefined : dosed.answers({ doseScale: 1, endless: false })
