@@ -46,7 +46,7 @@ const spentSubstrate = 1e-2
 /** A run that takes more steps than this is not the smooth one that these coordinates are for. */
 const mostSteps = 2000
 /** The first step of a fifth-order method in coordinates of order one. */
-const firstStepOf = (tolerance: number): number => 5 * Math.sqrt(Math.sqrt(tolerance)) * tolerance ** -0.05
+const firstStepOf = (tolerance: number): number => 7 * tolerance ** 0.2
 
 /**
  * Steps along u = ln(m0/m) to `u`, or to where the run ends or the enzyme is spent; at a steady temperature.

@@ -1,6 +1,6 @@
 /**
  * `npm run bench`: what the engine's answers cost, as ratios to yardsticks of the same run, each with the error
- * achieved. Times are medians of interleaved repeats; only the ratios are worth quoting.
+ * achieved. Times are lower quartiles of interleaved repeats; only the ratios are worth quoting.
  */
 import { closedForms } from './closed-forms.ts'
 import { summary } from './measure.ts'
