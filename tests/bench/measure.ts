@@ -14,7 +14,7 @@ export interface Measured {
 }
 
 /** So long each contender runs before it is timed, ns: the compiler has then done its work. */
-const warmUp = 400_000_000n
+const warmUp = 800_000_000n
 /** So long all repeats of one contender take at least, ns, and so many there are at least. */
 const enough = 300_000_000
 const leastRepeats = 15
