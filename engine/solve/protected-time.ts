@@ -11,7 +11,7 @@ import type { ReactionPath } from './reaction-path.ts'
 
 const { nodes, weights } = gauss16
 
-/** A panel this wide in u keeps 16 nodes at round-off. */
+/** A panel this wide at the start of u keeps 16 nodes at round-off; each next one may be twice as wide. */
 const panelWidth = 4
 /** A panel in which the enzyme falls below this share is halved: 1/E is then no longer smooth in it. */
 const leastShare = 0.4
@@ -43,10 +43,13 @@ export const protectedWorkspace = (): ProtectedWorkspace => ({
 export function protectedLoss(path: ReactionPath, decay: ProtectedDecay, u: number): number {
   const room = protectedWorkspace()
   let sum = 0
-  for (let low = 0; low < u; low += panelWidth) {
-    const width = Math.min(panelWidth, u - low)
+  let low = 0
+  // Exponentials in u fade as panels grow: a slow fraction may take u to any length.
+  for (let panel = panelWidth; low < u; panel *= 2) {
+    const width = Math.min(panel, u - low)
     slopesInto(room, path, decay, low, width)
     sum += width * integrateWhole(room.loss)
+    low += width
   }
   return sum
 }
