@@ -20,7 +20,7 @@ import { solverOf } from './solve/solver.ts'
 export function plan(scenario: Scenario): Outcome<Answer, PlanFailure> {
   const { ask } = scenario
   const body = answerTo(scenario)
-  if (!body.ok) return failed(body.failure)
+  if (!body.ok) return failed(named(body.failure))
   const answer = costed(scenario, { ask, ...body.value })
   const lost = notFinite(answer)
   return lost === undefined ? success(answer) : failed({ kind: 'beyond-doubles', what: lost })
@@ -39,6 +39,12 @@ function answerTo(scenario: Scenario): Outcome<AnswerBody, PlanFailure> {
       return findTrace(scenario, solverOf(scenario), ask.at)
   }
 }
+
+/** A failure whose moment is not a number is one of the numbers, not of the stepping. */
+const named = (failure: PlanFailure): PlanFailure =>
+  'time' in failure && !Number.isFinite(failure.time)
+    ? { kind: 'beyond-doubles', what: 'the course of the batch' }
+    : failure
 
 function costed({ costs }: Scenario, answer: Answer): Answer {
   const { dose, time } = answer

@@ -82,7 +82,11 @@ export function march(batch: Batch, mover: Mover, request: RunRequest): Outcome<
     const enzymeFrom = mover.activeEnzyme()
     const due = outputs.length < wanted.length ? dueWithin(step, from, length) : none
     const passed = mover.advance(step, length, stopAt, due)
-    if (!passed.ok) return failed(passed.failure)
+    if (!passed.ok) {
+      const { failure } = passed
+      // A run counts its time from its own start.
+      return failed('time' in failure ? { ...failure, time: from + failure.time } : failure)
+    }
     const { elapsed, stopped } = passed.value
     for (const state of passed.value.outputs) {
       if (stopped && state.time > elapsed - sameMoment) break
