@@ -7,7 +7,7 @@ import type { Integrator } from '../integrate/integrator.ts'
 import type { EnzymeModel } from './enzyme-model.ts'
 import { plainRates } from './plain-rates.ts'
 import { type ReactionStart, reactionRates } from './reaction-rates.ts'
-import type { Run } from './timeline.ts'
+import { fedAfter, type Run } from './timeline.ts'
 
 export interface Approach {
   /** s since the run's start */
@@ -48,12 +48,44 @@ const mostSteps = 2000
 /** The first step of a fifth-order method in coordinates of order one. */
 const firstStepOf = (tolerance: number): number => 7 * tolerance ** 0.2
 
+/** How much of the way to the end, in logarithms, a target lies; 1 without one. */
+export const shareOf = (target: number | undefined): number =>
+  target === undefined ? 1 : Math.min(1, -Math.log1p(-target))
+
+/** Whether there is a cheaper way for this kind of run: uniform substrate, one step of inactivation. */
+export function approachable(model: EnzymeModel, run: Run, stopAt: number | undefined): boolean {
+  const steady = run.course.kind === 'steady'
+  if (steady && !run.feed) return stopAt !== undefined
+  return (steady || !run.feed) && model.inactivation?.Kp === undefined
+}
+
+/**
+ * The cheaper way through a run, to its end or to the conversion `stopAt` of the substrate supplied so far, kg, and
+ * what the run feeds.
+ */
+export function approach(
+  model: EnzymeModel,
+  stretch: Stretch,
+  supplied: number,
+  stopAt: number | undefined,
+): Approach | undefined {
+  const { run, start, tolerance } = stretch
+  const { feed } = run
+  if (run.course.kind === 'steady' && !feed && stopAt !== undefined)
+    return approachByReaction(model, Math.log(start.substrate / ((1 - stopAt) * supplied)), stretch)
+  const tighter = { ...stretch, tolerance: Math.max(1e-14, tolerance * shareOf(stopAt)) }
+  if (stopAt === undefined) return approachInAmounts(model, undefined, tighter)
+  const left = (1 - stopAt) / start.substrate
+  const fedIn = feed?.substrate ?? 0
+  return approachInAmounts(model, (t, m) => m - left * (supplied + fedAfter(feed, t) * fedIn), tighter)
+}
+
 /**
  * Steps along u = ln(m0/m) to `u`, or to where the run ends or the enzyme is spent; at a steady temperature.
  *
  * Shapes   undefined where the reaction does not go forward or the stepping gives up.
  */
-export function approachByReaction(
+function approachByReaction(
   model: EnzymeModel,
   u: number,
   { run, start, length, integrator, tolerance }: Stretch,
@@ -96,7 +128,7 @@ export function approachByReaction(
  *
  * Shapes   due(t, m) of the time and the substrate's mass relative to the start; undefined where the stepping gives up.
  */
-export function approachInAmounts(
+function approachInAmounts(
   model: EnzymeModel,
   due: ((t: number, m: number) => number) | undefined,
   { run, start, length, integrator, tolerance }: Stretch,

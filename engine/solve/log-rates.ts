@@ -11,6 +11,7 @@ import type { RateInto } from '../integrate/problem.ts'
 import type { RateConstants } from '../kinetics/rate-law.ts'
 import type { EnzymeModel } from './enzyme-model.ts'
 import type { SlowFraction } from './reaction-path.ts'
+import type { Batch } from './route.ts'
 import { temperatureAt } from './temperature-course.ts'
 import type { Run } from './timeline.ts'
 
@@ -21,6 +22,21 @@ export interface Surroundings {
   readonly productPool: number
   /** kg of enzyme in all its forms at the run's start */
   readonly totalEnzyme: number
+  /** kg of substrate fed in before */
+  readonly fed: number
+}
+
+/** Size of the state that a batch is integrated with. */
+export const stateSize = ({ feed, model }: Batch): number =>
+  (feed.substrate.slow ? 2 : 1) + (model.inactivation?.k2 ? 2 : 1)
+
+/** The same levels with so much substrate added, kg, of which a share is slow. */
+export function levelsAfterFeeding(levels: Float64Array, fed: number, slowShare: number): Float64Array {
+  const y = levels.slice()
+  if (fed === 0) return y
+  y[0] = Math.log(Math.exp(levels[0] as number) + fed * (1 - slowShare))
+  if (slowShare > 0) y[1] = Math.log(Math.exp(levels[1] as number) + fed * slowShare)
+  return y
 }
 
 /** The rates of one run; time counts from the run's start. */

@@ -4,7 +4,8 @@ import type { Scenario } from '../scenario.ts'
 import { batchOf } from './batch.ts'
 import { odeRoute } from './ode-route.ts'
 import type { Batch, Route } from './route.ts'
-import { separates, separationRoute } from './separation.ts'
+import { separates } from './separates.ts'
+import { separationRoute } from './separation.ts'
 
 export interface Solver {
   readonly batch: Batch

@@ -35,6 +35,10 @@ export interface FeedRun {
   readonly enzyme: number
 }
 
+/** m³ fed in by τ, s from the feed's start. */
+export const fedAfter = (feed: FeedRun | undefined, τ: number): number =>
+  feed ? τ * (feed.flow + 0.5 * feed.flowSlope * τ) : 0
+
 export interface Timeline {
   readonly steps: readonly Step[]
   /** Conditions after the last step, going on without end. */
