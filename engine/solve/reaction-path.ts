@@ -59,7 +59,8 @@ function uniformPath(law: RateConstants, charge: Charge): ReactionPath {
     substrate,
     consumed,
     coordinate: (conversion) => {
-      const share = (conversion * S0) / span
+      // Near 1 a single rounding of the share would be seen in the time.
+      const share = equilibrium === 0 ? conversion : (conversion * S0) / span
       return share >= 0 && share < 1 ? -Math.log1p(-share) : null
     },
     restingConversion: span / S0,
