@@ -61,6 +61,9 @@ export function goodTemperature(
   return found ? found.at : null
 }
 
+/** Temperatures this near to one another, relative in K, are one. */
+const agreed = 1e-6
+
 /**
  * How far the checking route's optimum, sought in a narrow window, lies from the answer: relative in K, or, where the
  * optimum is so flat that every temperature of the window does as well, in what is reached.
@@ -93,7 +96,7 @@ export function temperatureDifference(
   const there = byRoute(answered.checks, answered, aim, spend)
   const apart = Math.abs(found.at - near) / near
   const flat = Math.abs(there - found.value)
-  return Math.min(apart, Number.isFinite(flat) ? flat : apart)
+  return apart <= agreed || !Number.isFinite(flat) ? apart : Math.min(apart, flat)
 }
 
 function badness(solver: Solver, aim: Aim, spend: Budget): number {
