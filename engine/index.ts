@@ -1,5 +1,12 @@
 /** The door: everything the app may use of the engine. */
 export type * from './answer.ts'
+export * from './kinetics/degree-of-hydrolysis.ts'
+export * from './kinetics/heat-resistance.ts'
+export * from './kinetics/hydrolysis-gain.ts'
+export * from './kinetics/ph-bell.ts'
+export * from './kinetics/ph-full.ts'
+export * from './kinetics/ph-stat.ts'
+export * from './kinetics/q10.ts'
 export * from './outcome.ts'
 export { plan } from './plan.ts'
 export type * from './scenario.ts'

@@ -48,6 +48,9 @@ const mostSteps = 2000
 /** The first step of a fifth-order method in coordinates of order one. */
 const firstStepOf = (tolerance: number): number => 7 * tolerance ** 0.2
 
+/** An enzyme that dies within a single step may come out of it below nothing. */
+const isAmount = (x: number | undefined): boolean => x !== undefined && x > 0 && x < Number.POSITIVE_INFINITY
+
 /** How much of the way to the end, in logarithms, a target lies; 1 without one. */
 export const shareOf = (target: number | undefined): number =>
   target === undefined ? 1 : Math.min(1, -Math.log1p(-target))
@@ -111,7 +114,7 @@ function approachByReaction(
       firstStep: Math.min(u, last, firstStepOf(tolerance)),
     },
   )
-  if (!arrival.ok) return undefined
+  if (!arrival.ok || !isAmount(arrival.value.state[1])) return undefined
   const { time: at, state, event, work } = arrival.value
   const ended = event && last - (state[0] as number) <= 1e-9 * last
   return {
@@ -152,7 +155,7 @@ function approachInAmounts(
       firstStep: end * Math.min(1, firstStepOf(tolerance)),
     },
   )
-  if (!arrival.ok) return undefined
+  if (!arrival.ok || !isAmount(arrival.value.state[0]) || !isAmount(arrival.value.state[1])) return undefined
   const { time: at, state, event, work } = arrival.value
   const elapsed = event ? timeAt(at) : length
   const reached = event && due !== undefined && due(elapsed, state[0] as number) <= Math.max(0, left(state))

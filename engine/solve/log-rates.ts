@@ -9,6 +9,7 @@
  */
 import type { RateInto } from '../integrate/problem.ts'
 import type { RateConstants } from '../kinetics/rate-law.ts'
+import { protectedShare } from '../kinetics/substrate-protection.ts'
 import type { EnzymeModel } from './enzyme-model.ts'
 import type { SlowFraction } from './reaction-path.ts'
 import type { Batch } from './route.ts'
@@ -124,10 +125,10 @@ function generalRates(
     const living = Math.exp(state[enzymeAt] as number)
     let active = living
     let k1 = steady ? k1Steady : k1Of ? k1Of(T) : 0
-    if (Kp !== undefined) k1 /= 1 + S / Kp
+    if (Kp !== undefined) k1 *= protectedShare(Kp, S)
     if (k2Of) {
       let k2 = steady ? k2Steady : k2Of(T)
-      if (Kp !== undefined) k2 /= 1 + S / Kp
+      if (Kp !== undefined) k2 *= protectedShare(Kp, S)
       const native = Math.exp(state[enzymeAt + 1] as number)
       active =
         living * (native + residual.first * (1 - native)) +
@@ -152,3 +153,12 @@ function generalRates(
     if (slow) out[1] = -drive * slow.relativeRate + (inflow === 0 ? 0 : (inflow * share) / late)
   }
 }
+
+/** Conversion of a state, from the logarithm of a uniform substrate: nothing converted is 0, a little keeps its digits. */
+export const convertedOf = (
+  y: ArrayLike<number>,
+  uniform: boolean,
+  substrate: number,
+  supplied: number,
+): number =>
+  uniform ? -Math.expm1((y[0] as number) - Math.log(supplied)) + 0 : Math.max(0, 1 - substrate / supplied)

@@ -3,7 +3,7 @@ import type { Work } from '../answer.ts'
 import type { Integrator } from '../integrate/integrator.ts'
 import { failed, type Outcome, success } from '../outcome.ts'
 import { type Approach, approach, approachable, shareOf } from './approach.ts'
-import { levelsAfterFeeding, logRates, type Surroundings, stateSize } from './log-rates.ts'
+import { convertedOf, levelsAfterFeeding, logRates, type Surroundings, stateSize } from './log-rates.ts'
 import type { Advance, Mover } from './march.ts'
 import type { Exactness } from './ode-route.ts'
 import { sumOfWork } from './patient-run.ts'
@@ -252,7 +252,7 @@ export class OdeMover implements Mover {
       temperature: temperatureAt(run.course, Number.isFinite(τ) ? τ : 0),
       pH: run.pH,
       volume,
-      conversion: 1 - substrate / supplied,
+      conversion: convertedOf(y, this.enzymeAt === 1, substrate, supplied),
       imbalance: (product * volume + massYield * substrate) / pool - 1,
     }
   }
