@@ -33,14 +33,12 @@ const programmesCount = 500
 /** Where each reference costs milliseconds. */
 const fewer = 200
 
-/** Bench of everything that separates. */
-export function closedForms(): void {
-  console.log('Without stepping')
-  closedForm()
-  programmes('ramp of 0.3 K/h', rampCases(programmesCount))
-  programmes('six-phase programme', programmeCases(programmesCount))
-  withoutClosedForm()
-  console.log('')
+/** What separates, each part to be measured in a process of its own. */
+export const closedForms = {
+  'closed-form': closedForm,
+  ramp: () => programmes('ramp of 0.3 K/h', rampCases(programmesCount)),
+  programme: () => programmes('six-phase programme', programmeCases(programmesCount)),
+  'no-closed-form': withoutClosedForm,
 }
 
 function closedForm(): void {

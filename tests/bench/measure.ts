@@ -84,16 +84,8 @@ const short = (x: number): string => x.toExponential(1)
 export const duration = (ns: number): string =>
   ns < 1000 ? `${ns.toFixed(0)} ns` : `${(ns / 1000).toFixed(2)} µs`
 
-const goals = { met: 0, missed: 0 }
-
-/** The last line of the report. */
-export function summary(): string {
-  return `${goals.met} goals met, ${goals.missed} missed`
-}
-
 /** One line of the report; without a `goal` it is there to compare with. */
 export function report(label: string, measured: Measured, goal?: { text: string; met: boolean }): void {
-  if (goal) goals[goal.met ? 'met' : 'missed']++
   const { median, p99, worst } = measured.errors
   console.log(
     `${goal ? (goal.met ? 'meets ' : 'MISSES') : '      '} ${label.padEnd(52)} ${duration(measured.nanoseconds).padStart(9)}  ${(goal?.text ?? '').padEnd(22)} error median ${short(median)}, 99 % ${short(p99)}, worst ${short(worst)}`,

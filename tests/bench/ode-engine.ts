@@ -8,20 +8,19 @@ import { constantTime, feedTime, programmeTime } from './yardstick.ts'
 /** So few that their scenarios stay in the processor's cache, as the one of a plan does. */
 const count = 500
 
-/** Bench of the integration of the balances. */
-export function odeEngine(): void {
-  console.log('ODE engine, time beside Dormand–Prince 5(4) inlined by hand')
-  compare('constant', constantCases(count), Km, constantTime)
-  compare('six-phase programme', programmeCases(count), Km, programmeTime)
-  compare(
-    'stiff end (Km/S0 = 1e-4, to 99.99 %)',
-    constantCases(count, 0.0045, 0.9999),
-    0.0045,
-    (dose, T, km, tolerance) => constantTime(dose, T, km, tolerance, 0.9999),
-    0.9999,
-  )
-  compare('feed', feedCases(count), Km, feedTime)
-  console.log('')
+/** The integration of the balances, each kind of batch to be measured in a process of its own. */
+export const odeEngine = {
+  constant: () => compare('constant', constantCases(count), Km, constantTime),
+  'six-phases': () => compare('six-phase programme', programmeCases(count), Km, programmeTime),
+  'stiff-end': () =>
+    compare(
+      'stiff end (Km/S0 = 1e-4, to 99.99 %)',
+      constantCases(count, 0.0045, 0.9999),
+      0.0045,
+      (dose, T, km, tolerance) => constantTime(dose, T, km, tolerance, 0.9999),
+      0.9999,
+    ),
+  feed: () => compare('feed', feedCases(count), Km, feedTime),
 }
 
 type Yardstick = (dose: number, T: number, km: number, tolerance: number) => number

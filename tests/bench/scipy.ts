@@ -22,7 +22,6 @@ interface Reply {
 
 /** Bench beside SciPy where there is one. */
 export function againstScipy(): void {
-  console.log("ODE engine beside SciPy's solve_ivp, LSODA with an event")
   const cases = constantCases(count)
   const reply = askPython({
     cases: cases.map(({ dose, T }) => ({ k: kAt(T), kd: kdAt(T), dose, km: Km })),
@@ -33,7 +32,7 @@ export function againstScipy(): void {
     target: (1 - conversion) * S0,
   })
   if (!reply) {
-    console.log('       skipped: no python3 with SciPy here; on Debian: apt-get install python3-scipy\n')
+    console.log('       skipped: no python3 with SciPy here; on Debian: apt-get install python3-scipy')
     return
   }
   const exact = Float64Array.from(cases, ({ dose, T }) => constantTime(dose, T, Km, 1e-13))
@@ -64,7 +63,6 @@ export function againstScipy(): void {
     })
     report(`   ${lsoda.name}`, lsoda)
   }
-  console.log('')
 }
 
 /** The loosest run of SciPy whose errors, the median and the 99 % one, are no larger than the engine's. */
