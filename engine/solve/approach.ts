@@ -108,7 +108,8 @@ function approachByReaction(
     },
     {
       relative: stepShare * tolerance,
-      absolute: stepShare * tolerance,
+      // The way to an early target is short, and so is its time.
+      absolute: stepShare * tolerance * Math.min(1, u),
       maxSteps: mostSteps,
       method: 'explicit',
       firstStep: Math.min(u, last, firstStepOf(tolerance)),

@@ -154,11 +154,18 @@ function generalRates(
   }
 }
 
-/** Conversion of a state, from the logarithm of a uniform substrate: nothing converted is 0, a little keeps its digits. */
-export const convertedOf = (
+/**
+ * Conversion of a state, from the logarithm of a uniform substrate: a little keeps its digits.
+ *
+ * Shapes   never below 0 unless the reaction may run backwards.
+ */
+export function convertedOf(
+  { feed, model }: Batch,
   y: ArrayLike<number>,
-  uniform: boolean,
   substrate: number,
   supplied: number,
-): number =>
-  uniform ? -Math.expm1((y[0] as number) - Math.log(supplied)) + 0 : Math.max(0, 1 - substrate / supplied)
+): number {
+  if (feed.substrate.slow) return Math.max(0, 1 - substrate / supplied)
+  const converted = -Math.expm1((y[0] as number) - Math.log(supplied)) + 0
+  return model.law(undefined).Keq === undefined ? Math.max(0, converted) : converted
+}

@@ -252,7 +252,7 @@ export class OdeMover implements Mover {
       temperature: temperatureAt(run.course, Number.isFinite(τ) ? τ : 0),
       pH: run.pH,
       volume,
-      conversion: convertedOf(y, this.enzymeAt === 1, substrate, supplied),
+      conversion: convertedOf(this.batch, y, substrate, supplied),
       imbalance: (product * volume + massYield * substrate) / pool - 1,
     }
   }

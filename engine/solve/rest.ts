@@ -67,6 +67,12 @@ export function restsOf(
       level: (y) => (y[substrates] as number) - least,
       settle: () => {},
     })
+    // Of the native form nothing is left: its share has no more to say.
+    rests.push({
+      components: [substrates + 1, substrates + 2],
+      level: (y) => (y[substrates + 1] as number) - logNothing,
+      settle: () => {},
+    })
   }
   return rests
 }
