@@ -22,7 +22,9 @@ export function fractionPath(law: RateConstants, charge: Charge, slow: SlowFract
   const fast0 = S0 - slow0
   const { relativeRate } = slow
   const substrate = (u: number): number => fast0 * Math.exp(-u) + slow0 * Math.exp(-relativeRate * u)
-  const consumed = (u: number): number => -fast0 * Math.expm1(-u) - slow0 * Math.expm1(-relativeRate * u)
+  // The two shares may round to more than their whole.
+  const consumed = (u: number): number =>
+    Math.min(S0, -fast0 * Math.expm1(-u) - slow0 * Math.expm1(-relativeRate * u))
   const demandSlopeAt = (S: number): number => resistance(law, S, P0 + massYield * (S0 - S))
   const demandSlope = (u: number): number => demandSlopeAt(substrate(u))
   const demand = (u: number): number => {

@@ -243,7 +243,7 @@ export class OdeMover implements Mover {
     const fedIn = run.feed?.substrate ?? 0
     const supplied = this.charged + start.fed + fed * fedIn
     const pool = start.productPool + fed * ((run.feed?.product ?? 0) + massYield * fedIn)
-    const product = (pool - massYield * substrate) / volume
+    const product = Math.max(0, (pool - massYield * substrate) / volume)
     return {
       time,
       substrate: substrate / volume,
