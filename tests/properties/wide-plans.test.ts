@@ -39,10 +39,14 @@ const waits = (file: File): boolean => phasesOf(file).some((phase) => phase.unti
 const begun = (file: File): number => Number((file.ask as { readonly conversion: number }).conversion)
 
 test('every number of a plan is finite', () => {
-  holds(widePlan({ feeds: true }), (file) => {
-    expect(notFinite(printed(file))).toEqual([])
-    expect(notFinite(printed(asking(file, { find: 'trace', at: ['0 h', '3 h', '300 h'] })))).toEqual([])
-  })
+  holds(
+    widePlan({ feeds: true }),
+    (file) => {
+      expect(notFinite(printed(file))).toEqual([])
+      expect(notFinite(printed(asking(file, { find: 'trace', at: ['0 h', '3 h', '300 h'] })))).toEqual([])
+    },
+    200,
+  )
 })
 
 test('the two routes agree about a plan at constant volume', () => {
@@ -52,7 +56,7 @@ test('the two routes agree about a plan at constant volume', () => {
       const answer = answerTo(file)
       expect(answer.check.relativeDifference).not.toBeNull()
       // Stepping restarts at each of a dozen kinks; a target of a millionth hangs on the last digits of ln S.
-      const early = answer.reachable ? Math.max(1, 1e-3 / begun(file)) : 1
+      const early = answer.reachable ? Math.max(1, 0.01 / begun(file)) : 1
       expect(answer.check.relativeDifference).toBeLessThan(2e-6 * magnified(answer) * early)
     },
     600,
@@ -62,7 +66,7 @@ test('the two routes agree about a plan at constant volume', () => {
 test('the two methods agree about a plan with feeds', () => {
   holds(widePlan({ feeds: true }), (file) => {
     const answer = answerTo(file)
-    const early = answer.reachable ? Math.max(1, 1e-3 / begun(file)) : 1
+    const early = answer.reachable ? Math.max(1, 0.01 / begun(file)) : 1
     if (answer.check.relativeDifference === null)
       expect(answer.warnings.map(({ code }) => code)).toContain('check-failed')
     else expect(answer.check.relativeDifference).toBeLessThan(1e-5 * magnified(answer) * early)
@@ -105,15 +109,19 @@ test('more dose is never slower where no hold waits', () => {
 })
 
 test('the ledger of a plan sums to its time', () => {
-  holds(widePlan({ feeds: true }), (file) => {
-    const { hours: ledger, time } = answerTo(file)
-    fc.pre(ledger !== undefined)
-    const lines = ledger?.lines.map((line) => line.time) ?? []
-    const sum = lines.reduce((total, line) => total + line, 0)
-    // Lines that take time and give it back round off on the scale of the largest of them.
-    const scale = Math.max(time ?? 0, ...lines.map(Math.abs))
-    expect(Math.abs(sum - (time ?? 0)) / scale).toBeLessThan(1e-12)
-  })
+  holds(
+    widePlan({ feeds: true }),
+    (file) => {
+      const { hours: ledger, time } = answerTo(file)
+      fc.pre(ledger !== undefined)
+      const lines = ledger?.lines.map((line) => line.time) ?? []
+      const sum = lines.reduce((total, line) => total + line, 0)
+      // Lines that take time and give it back round off on the scale of the largest of them.
+      const scale = Math.max(time ?? 0, ...lines.map(Math.abs))
+      expect(Math.abs(sum - (time ?? 0)) / scale).toBeLessThan(1e-12)
+    },
+    150,
+  )
 })
 
 test('a wait split in two changes nothing', () => {
