@@ -139,3 +139,27 @@ export function seriesAtInto(point: SeriesPoint, coefficients: Float64Array, x: 
   point.integral = integral
   point.value = value
 }
+
+/** Where in [0, 1] the integral of a positive series reaches `due`: Newton's method in a bracket; `point` is scratch. */
+export function seriesReaches(
+  point: SeriesPoint,
+  coefficients: Float64Array,
+  due: number,
+  start: number,
+): number {
+  let low = 0
+  let high = 1
+  let x = start
+  for (let i = 0; i < 60; i++) {
+    seriesAtInto(point, coefficients, x)
+    const surplus = point.integral - due
+    if (surplus < 0) low = x
+    else high = x
+    let better = x - surplus / point.value
+    if (!(better >= low && better <= high)) better = 0.5 * (low + high)
+    const step = Math.abs(better - x)
+    x = better
+    if (step < 1e-15) break
+  }
+  return x
+}

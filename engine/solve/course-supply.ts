@@ -12,6 +12,7 @@ import {
   order,
   type SeriesPoint,
   seriesAtInto,
+  seriesReaches,
 } from '../numeric/collocation.ts'
 import { gauss16 } from '../numeric/gauss-legendre.ts'
 import type { EnzymeModel } from './enzyme-model.ts'
@@ -27,6 +28,10 @@ const calmSpan = 9
 const calmLoss = 0.1
 /** Enzyme lost within a cell, in e-folds, that keeps it there. */
 const cellLoss = 1.3
+/** Before this share of a cell a time is sought in a smaller one, of this share at least, and so often at most. */
+const earlyShare = 0.1
+const leastNarrowing = 1e-4
+const mostNarrowings = 60
 /** Past this many e-folds what is still supplied is below the last digit of what was. */
 const spent = 45
 
@@ -132,24 +137,27 @@ export class CourseSupply {
   timeFor(amount: number): number | null {
     while (this.suppliedBefore + this.suppliedWithin < amount) if (!this.next()) return null
     if (!(this.suppliedWithin > 0)) return this.from
-    this.prepareSeries()
-    const due = (amount - this.suppliedBefore) / this.width()
-    let low = 0
-    let high = 1
-    let x = (amount - this.suppliedBefore) / this.suppliedWithin
-    const { point, rateSeries } = this.room
-    for (let i = 0; i < 60; i++) {
-      seriesAtInto(point, rateSeries, x)
-      const surplus = point.integral - due
-      if (surplus < 0) low = x
-      else high = x
-      let better = x - surplus / point.value
-      if (!(better >= low && better <= high)) better = 0.5 * (low + high)
-      const step = Math.abs(better - x)
-      x = better
-      if (step < 1e-15) break
+    let x = this.shareFor(amount)
+    // The digits of a cell are those of its whole: what is supplied early in it is found in a smaller one.
+    for (let i = 0; i < mostNarrowings && x < earlyShare; i++) {
+      this.to = this.from + Math.max(2 * x, leastNarrowing) * this.width()
+      if (!(this.to > this.from)) return this.from
+      this.fill()
+      while (this.suppliedBefore + this.suppliedWithin < amount && this.to < this.cellEnd) {
+        this.to = Math.min(this.cellEnd, this.from + 4 * this.width())
+        this.fill()
+      }
+      x = this.shareFor(amount)
     }
     return this.from + x * this.width()
+  }
+
+  /** The share of the present cell's width at which `amount` has been supplied. */
+  private shareFor(amount: number): number {
+    this.prepareSeries()
+    const { point, rateSeries } = this.room
+    const due = amount - this.suppliedBefore
+    return seriesReaches(point, rateSeries, due / this.width(), Math.min(1, due / this.suppliedWithin))
   }
 
   private width(): number {
