@@ -93,7 +93,7 @@ function approachByReaction(
   u: number,
   { run, start, length, integrator, tolerance }: Stretch,
 ): Approach | undefined {
-  if (!(u > 0 && u < 700)) return undefined
+  if (!(u > 0 && u < 700) || !(u < toEquilibrium(model, run, start))) return undefined
   const rates = reactionRates(model, run, start)
   if (!rates) return undefined
   const { timeScale } = rates
@@ -125,6 +125,13 @@ function approachByReaction(
     lnEnzyme: Math.log(state[1] as number),
     work,
   }
+}
+
+/** u of the equilibrium, beyond which no step may be tried: the reaction would seem to run in time gone by. */
+function toEquilibrium({ law, massYield }: EnzymeModel, run: Run, start: ReactionStart): number {
+  const { Keq } = law(run.pH)
+  if (Keq === undefined) return Number.POSITIVE_INFINITY
+  return Math.log((start.substrate * (Keq + massYield)) / start.productPool)
 }
 
 /**

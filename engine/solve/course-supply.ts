@@ -26,6 +26,8 @@ const cellSpan = 6
 const calmSpan = 9
 /** Loss over the course, in e-folds, below which that is so. */
 const calmLoss = 0.1
+/** Change of the logarithm of a two-state equilibrium within a cell: it turns from flat to steep within a few. */
+const turnSpan = 2
 /** Enzyme lost within a cell, in e-folds, that keeps it there. */
 const cellLoss = 1.3
 /** Before this share of a cell a time is sought in a smaller one, of this share at least, and so often at most. */
@@ -97,13 +99,15 @@ export class CourseSupply {
     const from = course.from
     const to = temperatureAt(course, length)
     const steepest = Math.max(steepness.rate, steepness.inactivation)
-    const span = (steepest * Math.abs(to - from)) / (from * to)
+    const reach = Math.abs(to - from) / (from * to)
+    const span = steepest * reach
     const { k1 } = constants
     // A constant that grows e-fold `span` times along a ramp has nearly all its integral in the last of these e-folds.
     const most = k1 ? Math.max(k1(from), k1(to)) * length : 0
     this.calm = most < Math.min(cellLoss, calmLoss * Math.max(1, span))
     const widest = this.calm ? calmSpan : cellSpan
-    this.cells = Math.min(mostCells, Math.max(1, Math.ceil(span / widest)))
+    const turns = (steepness.loss * reach) / turnSpan
+    this.cells = Math.min(mostCells, Math.max(1, Math.ceil(Math.max(span / widest, turns))))
     this.temperatureStep = (to - from) / this.cells
     this.next()
   }

@@ -29,8 +29,8 @@ export interface EnzymeModel {
   /** pH of the highest rate; of the bell, or with the full model of the complex (the saturated enzyme). */
   readonly bestPh?: number
   readonly massYield: number
-  /** Largest |d ln k/d(−1/T)| and |d ln kd/d(−1/T)|, K: how fine a ramp has to be cut. */
-  readonly steepness: { readonly rate: number; readonly inactivation: number }
+  /** Largest |d ln k/d(−1/T)| and |d ln kd/d(−1/T)|, and that of the reversible loss alone, K: how to cut a ramp. */
+  readonly steepness: { readonly rate: number; readonly inactivation: number; readonly loss: number }
 }
 
 export interface InactivationModel {
@@ -88,6 +88,7 @@ export function enzymeModel(enzyme: Enzyme, feed: Feed): EnzymeModel {
     steepness: {
       rate: Math.abs(ea) + (loss ? loss.energy / gasConstant : 0),
       inactivation: inactivation?.steepness ?? 0,
+      loss: loss ? loss.energy / gasConstant : 0,
     },
   }
 }
