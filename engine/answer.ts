@@ -117,6 +117,8 @@ export type Warning =
   | { readonly code: 'beyond-equilibrium'; readonly equilibriumConversion: number }
   /** The target is met before all of the feed is in; feeding goes on so long after it. */
   | { readonly code: 'fed-after-target'; readonly until: Time }
+  /** Held at one temperature from the first dose the batch would never get there: its hours cannot be split. */
+  | { readonly code: 'hours-not-split'; readonly temperature: Temperature }
   /** Longer than anybody waits: over a year. */
   | { readonly code: 'very-long'; readonly time: Time }
 

@@ -49,6 +49,8 @@ export const warningSentence = (warning: Warning): string => {
       return `The target lies beyond the equilibrium, which is at ${percent(warning.equilibriumConversion)} conversion.`
     case 'fed-after-target':
       return `The target is met before all of the feed is in: feeding goes on for ${hours(warning.until)} and takes the conversion down again.`
+    case 'hours-not-split':
+      return `Where the hours go cannot be told: held at ${degrees(warning.temperature)} from the first dose the batch would never get there.`
     case 'very-long':
       return `The time, ${hours(warning.time)}, is longer than anybody waits; take it as "not in practice".`
     default:

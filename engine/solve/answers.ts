@@ -1,5 +1,5 @@
 /** What every answer is built from: the check, the work, the balance, the warnings that any ask may raise. */
-import type { Answer, Check, Warning, Work } from '../answer.ts'
+import type { Answer, Check, HoursLedger, Warning, Work } from '../answer.ts'
 import type { Outcome } from '../outcome.ts'
 import type { Scenario } from '../scenario.ts'
 import { quantity, type Temperature, type Time } from '../units/quantity.ts'
@@ -64,6 +64,10 @@ export function feedWarnings({ batch }: Solver, reachedAt: number, whole: BatchR
     whole?.marks.reduce((last, mark) => (fed.has(mark.phase) ? Math.max(last, mark.to) : last), 0) ?? 0
   return end > reachedAt ? [{ code: 'fed-after-target', until: quantity<Time>(end - reachedAt) }] : []
 }
+
+/** The warning that the hours could not be split, if so. */
+export const hoursWarnings = (hours: HoursLedger | undefined, { programme }: Scenario): Warning[] =>
+  hours ? [] : [{ code: 'hours-not-split', temperature: holdTemperature(programme) }]
 
 /** The warning that the checking route gave up, if it did. */
 export const gaveUp = (route: Outcome<unknown, RouteFailure>): Warning[] =>

@@ -11,6 +11,7 @@ import {
   edgeWarnings,
   feedWarnings,
   gaveUp,
+  hoursWarnings,
   massBalanceOf,
   workOf,
 } from './answers.ts'
@@ -66,6 +67,7 @@ export function findDose(
       ...conditionWarnings(scenario),
       ...checkWarnings(check),
       ...edgeWarnings(factor),
+      ...hoursWarnings(hours, scenario),
       ...feedWarnings(dosed, run.end.time, whole?.ok ? whole.value : undefined),
     ],
   })

@@ -13,6 +13,7 @@ import {
   edgeWarnings,
   feedWarnings,
   gaveUp,
+  hoursWarnings,
   massBalanceOf,
   workOf,
 } from './answers.ts'
@@ -69,6 +70,7 @@ export function findTime(
     warnings.push({ code: 'hold-shorter-than-time', hold: programme.hold, time: quantity<Time>(time) })
   if (time > year) warnings.push({ code: 'very-long', time: quantity<Time>(time) })
   const hours = hoursLedger(scenario, solver, conversion, run, time)
+  warnings.push(...hoursWarnings(hours, scenario))
   return success({
     reachable: true,
     time: quantity<Time>(time),

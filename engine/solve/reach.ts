@@ -31,6 +31,9 @@ export function timeTo(solver: Solver, conversion: number, doseScale = 1): numbe
   return reached.ok && reached.value.time !== undefined ? reached.value.time : Number.POSITIVE_INFINITY
 }
 
+/** A relative change of the time this small is in proportion to that of the dose. */
+const proportional = 1e-3
+
 /**
  * By how much a relative error of the enzyme-time is magnified in the time: mean over final rate of supply. At
  * constant conditions x/((1 − x)(−ln(1 − x))) with x = kd·I/(k·E0), which grows without bound at the edge of
@@ -47,9 +50,15 @@ export function amplification(solver: Solver, { run, time }: Reach, conversion: 
     const value = path.demand(u) / (time * model.k(pH)(temperature) * enzyme)
     return Number.isFinite(value) ? value : undefined
   }
-  const more = timeTo(solver, conversion, 1 + 1e-4)
-  const value = -Math.log(more / time) / Math.log1p(1e-4)
-  return Number.isFinite(value) && value > 0 ? value : undefined
+  // The nearer the edge, the smaller the change of dose over which the time still answers in proportion.
+  let found: number | undefined
+  for (let change = 1e-4; change > 1e-11; change *= 0.01) {
+    const value = -Math.log(timeTo(solver, conversion, 1 + change) / time) / Math.log1p(change)
+    if (!(Number.isFinite(value) && value > 0)) return found
+    found = value
+    if (value * change < proportional) return found
+  }
+  return found
 }
 
 /** Significant digits that a double leaves to a result so conditioned. */

@@ -50,3 +50,10 @@ export function apart(a: number, b: number): number {
   const scale = Math.max(Math.abs(a), Math.abs(b))
   return scale === 0 ? 0 : Math.abs(a - b) / scale
 }
+
+/** Fifty grams of substrate a litre in a cubic metre, one of product from one of substrate. */
+export const plainFeed: Json = {
+  volume: '1 m3',
+  substrate: { concentration: '50 g/L' },
+  product: { massYield: 1, concentration: '0 g/L' },
+}

@@ -1,6 +1,6 @@
 /** Batches that come to rest long before the time that integration would have to cover. */
 import { expect, test } from 'vitest'
-import { answerTo, apart, type File, type Json } from './asking.ts'
+import { answerTo, apart, type File, type Json, plainFeed } from './asking.ts'
 
 const lossOf = (steps: Json): Json => ({ ...(steps as object), Kp: '20 g/L' }) as Json
 
@@ -15,11 +15,7 @@ const series = (first: number, second: number): Json => ({
 const batch = (inactivation: Json, Keq: number | undefined, conversion: number, dose = 2): File => ({
   format: 'dosewright-scenario',
   version: 1,
-  feed: {
-    volume: '1 m3',
-    substrate: { concentration: '50 g/L' },
-    product: { massYield: 1, concentration: '0 g/L' },
-  },
+  feed: plainFeed,
   enzyme: {
     rate: {
       specificRate: '100 g/g/h',

@@ -1,15 +1,11 @@
 /** Corners of ramps that random plans brought to light: both routes must agree there. */
 import { expect, test } from 'vitest'
-import { answerTo, type File, type Json } from './asking.ts'
+import { answerTo, type File, type Json, plainFeed } from './asking.ts'
 
 const plan = (phases: Json, conversion: number, temperature: Json = {}, rate: Json = {}): File => ({
   format: 'dosewright-scenario',
   version: 1,
-  feed: {
-    volume: '1 m3',
-    substrate: { concentration: '50 g/L' },
-    product: { massYield: 1, concentration: '0 g/L' },
-  },
+  feed: plainFeed,
   enzyme: {
     rate: {
       specificRate: '100 g/g/h',

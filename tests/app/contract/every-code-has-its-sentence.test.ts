@@ -52,6 +52,10 @@ test.each<[Warning, string]>([
     'The target lies beyond the equilibrium, which is at 85.9 % conversion.',
   ],
   [
+    { code: 'hours-not-split', temperature: celsius(52) },
+    'Where the hours go cannot be told: held at 52 °C from the first dose the batch would never get there.',
+  ],
+  [
     { code: 'very-long', time: hours(12345) },
     'The time, 12345 h, is longer than anybody waits; take it as "not in practice".',
   ],

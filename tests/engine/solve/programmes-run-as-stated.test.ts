@@ -260,3 +260,31 @@ test('after a kill step the conversion stays where it was (first-order loss to n
   expect(conversion[3]).toBe(conversion[1])
   expect(product[3]).toBeCloseTo(0.5263 * 45 * (conversion[1] as number), 9)
 })
+
+describe('near the edge of reachability', () => {
+  const R = 8.31446261815324
+  const kd = (0.08 / 3600) * Math.exp((-230000 / R) * (1 / 318.15 - 1 / 313.15))
+  const k = (90 / 3600) * Math.exp((-45000 / R) * (1 / 318.15 - 1 / 313.15))
+  const demand = 45 * 0.9 + 8 * Math.log(10) + (8 / 6) * 0.5263 * 45 * (Math.log(10) - 0.9)
+
+  test.each([0.5, 0.9, 0.9999, 1 - 1e-7])(
+    'a batch that is stepped magnifies errors as x/((1 − x)(−ln(1 − x))) says, x = %f (closed form)',
+    (x) => {
+      const { precision } = answer({
+        ...scenario([], { find: 'time', conversion: 0.9 }),
+        // A dose so dense that its counted volume is nothing: stepped, and yet the closed form holds.
+        enzyme: { ...enzyme, density: quantity(1e12) },
+        programme: {
+          kind: 'constant',
+          temperature: celsius(45),
+          pH: 6.7,
+          dose: quantity((10 * kd * demand) / (k * x)),
+          countDoseVolume: true,
+        },
+      })
+      const magnified = x / ((1 - x) * -Math.log1p(-x))
+      expect((precision?.amplification ?? 0) / magnified).toBeGreaterThan(0.95)
+      expect((precision?.amplification ?? 0) / magnified).toBeLessThan(1.05)
+    },
+  )
+})
